@@ -1,0 +1,9 @@
+/**
+ * Real-time audio filtering in cascades of second-order sections: design them, inspect them, run them inside an
+ * audio callback, and retune them while they run. No runtime dependency.
+ */
+module io.github.polewright {
+    requires static org.jspecify;
+
+    exports io.github.polewright;
+}

@@ -110,6 +110,11 @@ public final class Certificate {
         return shortestFrames;
     }
 
+    /** The same certificate for a section that sits in another slot. */
+    Certificate inSlot(int slot, Knots moved) {
+        return new Certificate(slot, rule, distance, ringingBound, shortestFrames, moved);
+    }
+
     /** One sentence for a log. */
     @Override
     public String toString() {

@@ -15,6 +15,9 @@ public record Setting(double frequencyHz, double q, double gainDb) {
     /**
      * A setting.
      *
+     * @param frequencyHz centre or corner, in hertz
+     * @param q quality factor
+     * @param gainDb gain in decibels
      * @throws IllegalArgumentException if {@code frequencyHz} or {@code q} is not positive and finite, or {@code
      *     gainDb} is not finite
      */

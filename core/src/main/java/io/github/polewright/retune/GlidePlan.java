@@ -67,7 +67,7 @@ final class GlidePlan {
                 share -> mix(start, end, share),
                 1,
                 true,
-                pace.frames(from.sampleRateHz(), most(shortest), octaves),
+                pace.frames(from.sampleRateHz(), (double) most(shortest), octaves),
                 pace.isGentle());
         if (hold > 0) {
             draft.hold(hold);
@@ -91,7 +91,7 @@ final class GlidePlan {
         };
         GlideDraft shortestWay = new GlideDraft(flat(first));
         walk(shortestWay, path, legs, legs == 1, 0, false);
-        double wish = pace.frames(first.sampleRateHz(), most(shortestWay.shortest()), octaves);
+        double wish = pace.frames(first.sampleRateHz(), (double) most(shortestWay.shortest()), octaves);
         GlideDraft draft = new GlideDraft(flat(first));
         boolean straight = legs == 1 && !pace.isGentle();
         walk(draft, path, legs, straight, wish, pace.isGentle());

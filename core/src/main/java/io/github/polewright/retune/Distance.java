@@ -37,7 +37,7 @@ public final class Distance {
 
     /**
      * An upper bound of {@link #between} without logarithms, cheap enough for an audio thread: a few square roots for
-     * complex poles, some hundreds for real ones. For complex poles it is at most 2.6 % too large up to d = 7.
+     * complex poles, some hundreds for real ones. For complex poles it is at most 3.5 % too large up to d = 7.
      *
      * @param from where the ramp starts
      * @param to where it ends

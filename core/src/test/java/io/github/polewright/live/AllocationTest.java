@@ -20,6 +20,7 @@ class AllocationTest {
     private static final int CHANNELS = 2;
     private static final int BLOCKS = 1_000_000;
     private static final int WARM_UP = 20_000;
+    private static final int ATTEMPTS = 8;
     private static final ThreadMXBean METER = (ThreadMXBean) ManagementFactory.getThreadMXBean();
 
     /** Keeps a planted object from being optimized away. */
@@ -40,10 +41,7 @@ class AllocationTest {
     void aMillionBlocksAllocateNothing(Form form) throws InterruptedException {
         LiveCascade live = Rig.live(Designs.mixed(1, 5), CHANNELS, form);
         retunedMeanwhile(live, () -> {
-            for (int i = 0; i < 10; i++) {
-                bytes(() -> blocks(live, WARM_UP));
-            }
-            assertEquals(0, bytes(() -> blocks(live, BLOCKS)));
+            assertEquals(0, leastBytes(() -> blocks(live, BLOCKS)));
         });
     }
 
@@ -59,8 +57,7 @@ class AllocationTest {
                 live.reset();
             }
         };
-        faults.run();
-        assertEquals(0, bytes(faults));
+        assertEquals(0, leastBytes(faults));
         assertTrue(live.replacedInputSamples() > 0);
     }
 
@@ -69,8 +66,7 @@ class AllocationTest {
     @EnumSource(Form.class)
     void theMeterSeesOnePlantedAllocation(Form form) {
         LiveCascade live = Rig.live(Designs.mixed(1, 5), CHANNELS, form);
-        blocks(live, WARM_UP);
-        long bytes = bytes(() -> {
+        long bytes = leastBytes(() -> {
             blocks(live, BLOCKS / 20);
             planted = new Object();
             blocks(live, BLOCKS / 20);
@@ -91,6 +87,18 @@ class AllocationTest {
                 doubles[1] = 1;
             }
         }
+    }
+
+    /**
+     * The JVM itself puts a few single objects down to a thread when it loads a class or throws compiled code away; so
+     * the first runs may show some bytes. What the code under test allocates shows in every run.
+     */
+    private static long leastBytes(Runnable work) {
+        long least = Long.MAX_VALUE;
+        for (int run = 0; run < ATTEMPTS && least > 0; run++) {
+            least = Math.min(least, bytes(work));
+        }
+        return least;
     }
 
     private static long bytes(Runnable work) {

@@ -192,7 +192,7 @@ public final class Response {
         for (int i = 0; i < polynomials.size(); i++) {
             roots.addAll(polynomials.get(i).roots(degree(i)));
         }
-        return roots;
+        return List.copyOf(roots);
     }
 
     private int degree(int section) {

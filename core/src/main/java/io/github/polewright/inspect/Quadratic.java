@@ -62,7 +62,7 @@ record Quadratic(double c0, double c1, double c2) {
             return List.of(new Complex(real, imaginary), new Complex(real, -imaginary));
         }
         // The root of larger size first; the other from their product, so it does not cancel.
-        double outer = -(half + Math.copySign(Math.sqrt(square), half));
+        double outer = 0.0 - (half + Math.copySign(Math.sqrt(square), half));
         double inner = outer == 0 ? 0 : c2 / outer;
         return List.of(new Complex(outer / c0, 0), new Complex(inner, 0));
     }

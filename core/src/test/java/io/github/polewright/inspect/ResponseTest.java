@@ -3,7 +3,6 @@ package io.github.polewright.inspect;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
-import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
@@ -25,8 +24,8 @@ class ResponseTest {
     }
 
     /**
-     * The same coefficients at 60 digits. Beside an exact zero the true value hangs on the last bit of the frequency,
-     * hence the small absolute part.
+     * The same coefficients at 60 digits. Whatever is computed in doubles cannot tell a frequency from one 1e-16 of it
+     * away, so what the response changes over 4e-16 of the frequency (last column) is allowed.
      */
     @ParameterizedTest
     @MethodSource("precise")
@@ -35,9 +34,8 @@ class ResponseTest {
         Complex expected = new Complex(row.number(8), row.number(9));
         Complex actual = response.at(row.number(7));
         double difference = Math.hypot(actual.real() - expected.real(), actual.imaginary() - expected.imaginary());
-        assertTrue(
-                difference <= 1e-12 * expected.magnitude() + 1e-15,
-                difference / expected.magnitude() + " of " + expected);
+        double tolerance = 1e-12 * expected.magnitude() + 4e-16 * row.number(11);
+        assertEquals(0, difference, tolerance);
     }
 
     @ParameterizedTest
@@ -52,6 +50,7 @@ class ResponseTest {
         return Table.rows(ResponseTest.class, "group_delay.csv", ";");
     }
 
+    /** No narrow notch here: SciPy's delay loses digits beside one; those rows are in the table of 60 digits. */
     @ParameterizedTest
     @MethodSource("scipy")
     void delayGainAndPhaseAsFromSciPy(Table.Row row) {

@@ -7,4 +7,6 @@ module io.github.polewright {
 
     exports io.github.polewright;
     exports io.github.polewright.live;
+    exports io.github.polewright.design;
+    exports io.github.polewright.inspect;
 }

@@ -103,7 +103,9 @@ class ResponseTest {
         return Cascade.of(rate, sections);
     }
 
-    /** ITU-R BS.1770 tables at 48 kHz: the filters' curve, and +0.691 dB at 997 Hz, which the standard's offset undoes. */
+    /**
+     * ITU-R BS.1770 tables at 48 kHz: the filters' curve, and +0.691 dB at 997 Hz, which the standard's offset undoes.
+     */
     @Test
     void weightingOfBs1770() {
         List<Section> stages = Table.rows(ResponseTest.class, "kweighting.csv", ",").stream()

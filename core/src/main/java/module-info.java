@@ -7,4 +7,5 @@ module io.github.polewright {
 
     exports io.github.polewright;
     exports io.github.polewright.pcm;
+    exports io.github.polewright.design;
 }

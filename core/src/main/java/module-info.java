@@ -8,4 +8,5 @@ module io.github.polewright {
     exports io.github.polewright;
     exports io.github.polewright.pcm;
     exports io.github.polewright.design;
+    exports io.github.polewright.live;
 }

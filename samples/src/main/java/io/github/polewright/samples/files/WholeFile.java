@@ -63,7 +63,9 @@ public final class WholeFile {
             if (Files.exists(one) && Files.exists(other)) {
                 return Files.isSameFile(one, other);
             }
-            return one.toAbsolutePath().normalize().equals(other.toAbsolutePath().normalize());
+            return one.toAbsolutePath()
+                    .normalize()
+                    .equals(other.toAbsolutePath().normalize());
         } catch (IOException e) {
             throw new Failure("cannot compare " + one + " and " + other + ": " + reason(e), e);
         }

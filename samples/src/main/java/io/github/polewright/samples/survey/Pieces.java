@@ -41,6 +41,19 @@ final class Pieces {
         return pieces;
     }
 
+    /** Only the first piece. */
+    static Piece opening(Recording recording, double topHz) {
+        Pieces pieces = new Pieces(recording, topHz);
+        try (Frames frames = recording.read()) {
+            pieces.readPiece(frames, 0, recording.frames() / pieces.count());
+        }
+        return pieces.pieces.get(0);
+    }
+
+    private int count() {
+        return (int) Math.max(1, Math.round(recording.seconds() / PIECE_SECONDS));
+    }
+
     List<Piece> all() {
         return pieces;
     }
@@ -54,7 +67,7 @@ final class Pieces {
     }
 
     private void readAll() {
-        int count = (int) Math.max(1, Math.round(recording.seconds() / PIECE_SECONDS));
+        int count = count();
         long pieceFrames = recording.frames() / count;
         int kept = Math.min(count, MOST_PIECES);
         try (Frames frames = recording.read()) {
@@ -124,5 +137,4 @@ final class Pieces {
         }
         return snapshots;
     }
-
 }

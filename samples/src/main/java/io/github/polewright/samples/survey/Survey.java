@@ -39,8 +39,7 @@ public record Survey(
             if (moment.seconds() >= seconds) {
                 double span = moment.seconds() - before.seconds();
                 double share = span > 0 ? (seconds - before.seconds()) / span : 1;
-                return before.frequencyHz()
-                        + Math.max(0, share) * (moment.frequencyHz() - before.frequencyHz());
+                return before.frequencyHz() + Math.max(0, share) * (moment.frequencyHz() - before.frequencyHz());
             }
             before = moment;
         }

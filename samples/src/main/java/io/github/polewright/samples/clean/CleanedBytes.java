@@ -10,7 +10,7 @@ final class CleanedBytes extends InputStream {
 
     private final Recording recording;
     private final Frames frames;
-    private final Stream stream;
+    private final CleaningStream stream;
     private final LongConsumer progress;
     private final double[] block;
     private final byte[] bytes;
@@ -19,13 +19,13 @@ final class CleanedBytes extends InputStream {
     private long clippedSamples;
     private long framesDone;
 
-    CleanedBytes(Recording recording, Frames frames, Stream stream, LongConsumer progress) {
+    CleanedBytes(Recording recording, Frames frames, CleaningStream stream, LongConsumer progress) {
         this.recording = recording;
         this.frames = frames;
         this.stream = stream;
         this.progress = progress;
-        this.block = new double[Stream.BLOCK_FRAMES * recording.channels()];
-        this.bytes = new byte[Stream.BLOCK_FRAMES * recording.format().getFrameSize()];
+        this.block = new double[CleaningStream.BLOCK_FRAMES * recording.channels()];
+        this.bytes = new byte[CleaningStream.BLOCK_FRAMES * recording.format().getFrameSize()];
     }
 
     long clippedSamples() {
@@ -50,7 +50,7 @@ final class CleanedBytes extends InputStream {
     }
 
     private boolean fill() {
-        int got = frames.read(block, Stream.BLOCK_FRAMES);
+        int got = frames.read(block, CleaningStream.BLOCK_FRAMES);
         if (got == 0) {
             return false;
         }

@@ -21,7 +21,7 @@ public final class Cleaner {
      */
     public static Cleaning clean(Recording in, Path out, Survey survey, CleanWish wish, LongConsumer progress) {
         HumCascade cascade = new HumCascade(in.sampleRateHz(), survey, wish);
-        Stream stream = new Stream(cascade, survey, in.sampleRateHz(), in.channels());
+        CleaningStream stream = new CleaningStream(cascade, survey, in.sampleRateHz(), in.channels());
         long start = System.nanoTime();
         stream.runUp(OpeningHum.of(in, survey), wish);
         long clipped;

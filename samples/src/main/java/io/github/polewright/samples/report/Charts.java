@@ -12,6 +12,8 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.TreeSet;
 import javax.imageio.ImageIO;
 import javax.xml.parsers.DocumentBuilderFactory;
@@ -31,14 +33,17 @@ final class Charts {
     private static final int HEIGHT = 560;
     private static final Color BEFORE = new Color(0xb8, 0x4a, 0x1f);
     private static final Color AFTER = new Color(0x1f, 0x5f, 0x8b);
+    private static final int MOST_POINTS = 2400;
     private static final double[] BESIDE_WIDTHS = {0, 0.05, 0.15, 0.3, 0.5, 0.8, 1.5, 3, 6};
 
     private Charts() {}
 
     static XYChart spectra(String title, AverageSpectrum before, AverageSpectrum after, double fromHz, double toHz) {
         XYChart chart = chart(title, "level, dB (full-scale sine: 0)");
+        chart.getStyler().setXAxisLogarithmic(fromHz > 0);
         add(chart, "before", before, fromHz, toHz, BEFORE);
         add(chart, "after", after, fromHz, toHz, AFTER);
+        chart.getStyler().setXAxisTickMarkSpacingHint(90);
         chart.getStyler().setXAxisMin(fromHz);
         chart.getStyler().setXAxisMax(toHz);
         return chart;
@@ -91,11 +96,22 @@ final class Charts {
             XYChart chart, String name, AverageSpectrum spectrum, double fromHz, double toHz, Color color) {
         int first = (int) Math.max(0, Math.ceil(fromHz / spectrum.binHz()));
         int last = (int) Math.min(spectrum.bins() - 1, Math.floor(toHz / spectrum.binHz()));
-        double[] hertz = new double[last - first + 1];
-        double[] levels = new double[hertz.length];
-        for (int i = 0; i < hertz.length; i++) {
-            hertz[i] = (first + i) * spectrum.binHz();
-            levels[i] = spectrum.levelDb(first + i);
+        double ratio = Math.pow((double) last / first, 1.0 / MOST_POINTS);
+        double step = (double) (last - first) / MOST_POINTS;
+        List<Double> hertz = new ArrayList<>();
+        List<Double> levels = new ArrayList<>();
+        int from = first;
+        while (from <= last) {
+            // A point stands for all bins that fall on it, by the highest of them.
+            double next = chart.getStyler().isXAxisLogarithmic() ? from * ratio : from + step;
+            int to = (int) Math.min(last, Math.max(from, Math.ceil(next) - 1));
+            int highest = from;
+            for (int m = from; m <= to; m++) {
+                highest = spectrum.levelDb(m) > spectrum.levelDb(highest) ? m : highest;
+            }
+            hertz.add(highest * spectrum.binHz());
+            levels.add(spectrum.levelDb(highest));
+            from = to + 1;
         }
         style(chart.addSeries(name, hertz, levels), color);
     }

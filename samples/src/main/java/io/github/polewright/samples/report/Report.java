@@ -16,6 +16,7 @@ import java.util.List;
 public final class Report {
 
     private static final double CHART_TOP_HZ = 1000;
+    private static final double LOWEST_HZ = 10;
 
     private Report() {}
 
@@ -27,7 +28,7 @@ public final class Report {
         AverageSpectrum before = AverageSpectrum.of(in, wholeHz);
         AverageSpectrum after = AverageSpectrum.of(out, wholeHz);
         Charts.write(Charts.spectra("Where the lines are", before, after, 0, topHz), folder, "spectra-low");
-        Charts.write(Charts.spectra("All of it", before, after, 0, wholeHz), folder, "spectra-whole");
+        Charts.write(Charts.spectra("All of it", before, after, LOWEST_HZ, wholeHz), folder, "spectra-whole");
         Cascade cascade = new HumCascade(in.sampleRateHz(), survey, wish).at(survey.fundamentalHz());
         Charts.write(Charts.response(cascade, survey, wish.widthHz(), topHz), folder, "response");
         List<String> text = CleaningText.of(in, out.path(), cleaning, wish.removeDc());

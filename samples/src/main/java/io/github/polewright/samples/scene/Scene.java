@@ -105,8 +105,13 @@ public final class Scene {
     private double[] pluck(double seconds, double hertz) {
         int period = (int) Math.round(sampleRateHz / hertz);
         double[] sound = new double[(int) (seconds * sampleRateHz)];
+        double last = 0;
         for (int n = 0; n < sound.length; n++) {
-            sound[n] = n <= period ? 0.5 * random.nextGaussian() : 0.4985 * (sound[n - period] + sound[n - period - 1]);
+            // Differences of noise, so that the string holds no DC.
+            double noise = random.nextGaussian();
+            double start = 0.5 * (noise - last);
+            last = noise;
+            sound[n] = n <= period ? start : 0.4985 * (sound[n - period] + sound[n - period - 1]);
         }
         int fade = sound.length / 5;
         for (int n = 0; n < fade; n++) {

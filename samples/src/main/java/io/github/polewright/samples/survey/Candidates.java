@@ -11,7 +11,7 @@ final class Candidates {
     private static final double STEP_HZ = 0.05;
     private static final int HARMONICS = 20;
     private static final int MOST_MOMENTS = 60;
-    private static final double MOST_DB_PER_LINE = 30;
+    private static final double MOST_DB_PER_LINE = 60;
     private static final int PER_BAND = 2;
     private static final double APART_HZ = 0.3;
 

@@ -13,6 +13,8 @@ import java.util.Arrays;
  */
 final class HumFit {
 
+    private static final int MOST_SEARCHES = 8;
+
     private final Piece piece;
     private final int channels;
     private final int harmonics;
@@ -67,14 +69,19 @@ final class HumFit {
         double sumReal = 0;
         double sumImaginary = 0;
         double sumWeight = 0;
+        double turnPerSecond = -2 * Math.PI * harmonic * offsetHz;
+        double cos = Math.cos(turnPerSecond * piece.secondsFromCentre(0));
+        double sin = Math.sin(turnPerSecond * piece.secondsFromCentre(0));
+        double stepCos = Math.cos(turnPerSecond * piece.secondsApart());
+        double stepSin = Math.sin(turnPerSecond * piece.secondsApart());
         for (int s = 0; s < piece.moments(); s++) {
-            double turn = -2 * Math.PI * harmonic * offsetHz * piece.secondsFromCentre(s);
-            double cos = Math.cos(turn);
-            double sin = Math.sin(turn);
             double w = weight[channel][harmonic][s];
             sumReal += w * (real[channel][harmonic][s] * cos - imaginary[channel][harmonic][s] * sin);
             sumImaginary += w * (real[channel][harmonic][s] * sin + imaginary[channel][harmonic][s] * cos);
             sumWeight += w;
+            double turned = cos * stepCos - sin * stepSin;
+            sin = sin * stepCos + cos * stepSin;
+            cos = turned;
         }
         double evidence = (sumReal * sumReal + sumImaginary * sumImaginary) / sumWeight;
         return new double[] {sumReal / sumWeight, sumImaginary / sumWeight, evidence};
@@ -88,11 +95,19 @@ final class HumFit {
         return sum;
     }
 
-    /** Looks for the fundamental in steps around where it is; each line counts by its logarithm, so none rules. */
+    /** Looks for the fundamental in steps around where it is; each line counts by its size, not its power, so that
+     * one that is not hum but loud misleads less. */
     void searchByAllLines(double reachHz, double stepHz) {
         boolean[] all = new boolean[harmonics + 1];
         Arrays.fill(all, true);
-        search(reachHz, stepHz, all, true);
+        // A single strong line is so wide that the start may be off by more than the reach.
+        for (int i = 0; i < MOST_SEARCHES; i++) {
+            double from = fundamentalHz;
+            search(reachHz, stepHz, all, true);
+            if (Math.abs(fundamentalHz - from) < 0.9 * reachHz) {
+                return;
+            }
+        }
     }
 
     /** Looks closely, by the lines that are there, each by its strength. */
@@ -100,12 +115,12 @@ final class HumFit {
         search(reachHz, stepHz, there, false);
     }
 
-    private void search(double reachHz, double stepHz, boolean[] lines, boolean logarithmic) {
+    private void search(double reachHz, double stepHz, boolean[] lines, boolean bySize) {
         int steps = (int) Math.round(reachHz / stepHz);
         double[] score = new double[2 * steps + 1];
         int best = 0;
         for (int i = 0; i < score.length; i++) {
-            score[i] = score((i - steps) * stepHz, lines, logarithmic);
+            score[i] = score((i - steps) * stepHz, lines, bySize);
             if (score[i] > score[best]) {
                 best = i;
             }
@@ -118,7 +133,7 @@ final class HumFit {
         moveTo(fundamentalHz + (best - steps + vertex) * stepHz);
     }
 
-    private double score(double offsetHz, boolean[] lines, boolean logarithmic) {
+    private double score(double offsetHz, boolean[] lines, boolean bySize) {
         double sum = 0;
         for (int k = 1; k <= harmonics; k++) {
             if (lines[k]) {
@@ -126,7 +141,7 @@ final class HumFit {
                 for (int c = 0; c < channels; c++) {
                     evidence += line(c, k, offsetHz)[2];
                 }
-                sum += logarithmic ? Math.log1p(evidence) : evidence;
+                sum += bySize ? Math.sqrt(evidence) : evidence;
             }
         }
         return sum;
@@ -153,6 +168,24 @@ final class HumFit {
             }
         }
         return new int[] {telling, steady};
+    }
+
+    /** How much more power is on a line than one bin to either side; in the skirt of a note it is less than 1. */
+    double peakiness(int harmonic) {
+        double centre = 0;
+        double below = 0;
+        double above = 0;
+        for (int c = 0; c < channels; c++) {
+            for (int s = 0; s < piece.moments(); s++) {
+                Snapshot snapshot = piece.snapshot(s, c);
+                double lineHz = harmonic * fundamentalHz;
+                double w = weight[c][harmonic][s];
+                centre += w * snapshot.power(lineHz);
+                below += w * snapshot.power(lineHz - snapshot.binHz());
+                above += w * snapshot.power(lineHz + snapshot.binHz());
+            }
+        }
+        return centre / Math.max(below, above);
     }
 
     /** The power of what lies beside a line in a band of 1 Hz: the median over the moments, the mean over channels. */

@@ -31,6 +31,11 @@ final class Piece {
         return moments.get(moment)[channel];
     }
 
+    /** From one moment to the next; all are the same way apart. */
+    double secondsApart() {
+        return secondsFromCentre.size() < 2 ? 0 : secondsFromCentre.get(1) - secondsFromCentre.get(0);
+    }
+
     double secondsFromCentre(int moment) {
         return secondsFromCentre.get(moment);
     }

@@ -21,6 +21,7 @@ final class Snapshot {
     private final double binHz;
     private final float[] real;
     private final float[] imaginary;
+    private final double[] floors;
 
     /** Overwrites the samples. */
     Snapshot(double[] samples, DoubleFFT_1D transform, double sampleRateHz, double topHz) {
@@ -34,6 +35,7 @@ final class Snapshot {
         int bins = Math.min((length - 1) / 2, (int) Math.ceil(topHz / binHz) + REACH_BINS);
         real = new float[bins];
         imaginary = new float[bins];
+        floors = new double[bins + 1];
         // The window sums to length / 2 and a sine gives half its amplitude to each of two bins.
         double scale = 4.0 / length;
         for (int m = 1; m < bins; m++) {
@@ -43,16 +45,20 @@ final class Snapshot {
         }
     }
 
-    /** The complex amplitude at any frequency, from the bins around it by the sampling theorem. */
+    /** The complex amplitude at any frequency, from the bins around it by the sampling theorem, faded out with
+     * distance so that what lies there stays out. */
     void amplitude(double frequencyHz, double[] realAndImaginary) {
         double place = frequencyHz / binHz;
         int from = Math.max(1, (int) Math.floor(place) - REACH_BINS + 1);
         int to = Math.min(real.length - 1, (int) Math.floor(place) + REACH_BINS);
         double sumReal = 0;
         double sumImaginary = 0;
-        for (int m = from; m <= to; m++) {
-            double x = Math.PI * (place - m);
-            double weight = Math.abs(x) < 1e-9 ? 1 : Math.sin(x) / x;
+        // sin(pi (place - m)) is the same for every m but for its sign.
+        double sine = Math.sin(Math.PI * (place - from)) / Math.PI;
+        for (int m = from; m <= to; m++, sine = -sine) {
+            double away = (place - m) / REACH_BINS;
+            double taper = (1 - away * away) * (1 - away * away);
+            double weight = Math.abs(place - m) < 1e-9 ? 1 : taper * sine / (place - m);
             sumReal += weight * real[m];
             sumImaginary += weight * imaginary[m];
         }
@@ -60,9 +66,27 @@ final class Snapshot {
         realAndImaginary[1] = sumImaginary;
     }
 
+    /** The squared amplitude at any frequency. */
+    double power(double frequencyHz) {
+        double[] value = new double[2];
+        amplitude(frequencyHz, value);
+        return value[0] * value[0] + value[1] * value[1];
+    }
+
+    double binHz() {
+        return binHz;
+    }
+
     /** The mean power, in squared amplitude, of what lies beside a line but not under it. */
     double floor(double frequencyHz) {
-        int centre = (int) Math.round(frequencyHz / binHz);
+        int centre = (int) Math.min(real.length, Math.round(frequencyHz / binHz));
+        if (floors[centre] == 0) {
+            floors[centre] = floorAround(centre);
+        }
+        return floors[centre];
+    }
+
+    private double floorAround(int centre) {
         double[] powers = new double[2 * (FLOOR_TO_BINS - FLOOR_FROM_BINS + 1)];
         int count = 0;
         for (int away = FLOOR_FROM_BINS; away <= FLOOR_TO_BINS; away++) {

@@ -26,7 +26,11 @@ public final class Surveyor {
     private final int harmonics;
 
     /** One candidate with all its fits. */
-    private record Hypothesis(List<HumFit> fits, Verdict verdict) {}
+    private record Hypothesis(List<HumFit> fits, Verdict verdict) {
+        double meanHz() {
+            return fits.stream().mapToDouble(HumFit::fundamentalHz).average().orElseThrow();
+        }
+    }
 
     private Surveyor(Recording recording, int harmonics) {
         this.recording = recording;
@@ -98,7 +102,9 @@ public final class Surveyor {
             double topHz = topHz(nominalHz + REACH_HZ);
             for (double candidateHz : Candidates.around(pieces.all(), channels, nominalHz, REACH_HZ, topHz)) {
                 Hypothesis hypothesis = fitted(pieces.all(), candidateHz);
-                if (hypothesis.verdict.isHum() && (best == null || hypothesis.verdict.score() > best.verdict.score())) {
+                if (hypothesis.verdict.isHum()
+                        && Math.abs(hypothesis.meanHz() - nominalHz) <= REACH_HZ
+                        && (best == null || hypothesis.verdict.score() > best.verdict.score())) {
                     best = hypothesis;
                 }
             }

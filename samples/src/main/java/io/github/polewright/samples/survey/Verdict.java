@@ -8,6 +8,8 @@ final class Verdict {
 
     // For 40 lines of mere noise to reach this once is one chance in several thousands.
     private static final double LEAST_EVIDENCE = 12;
+    // On a line alone it is 4.
+    private static final double LEAST_PEAKINESS = 1;
     private static final double STEADY_SHARE = 0.75;
     private static final double TELLING_SHARE = 0.25;
     private static final int TELLING_MOMENTS = 3;
@@ -39,7 +41,9 @@ final class Verdict {
         int most = 0;
         int telling = 0;
         int steady = 0;
+        double peakiness = 0;
         for (HumFit fit : fits) {
+            peakiness += fit.peakiness(harmonic) / fits.size();
             evidence[harmonic] += fit.evidence(harmonic) / fits.size();
             moments += fit.piece().moments();
         }
@@ -56,6 +60,7 @@ final class Verdict {
         steadyShare[harmonic] = telling == 0 ? 0 : (double) steady / telling;
         // Noise alone adds 1 a channel.
         there[harmonic] = evidence[harmonic] - channels >= LEAST_EVIDENCE
+                && peakiness >= LEAST_PEAKINESS
                 && most >= Math.max(TELLING_MOMENTS, TELLING_SHARE * moments)
                 && steadyShare[harmonic] >= STEADY_SHARE;
     }

@@ -10,7 +10,7 @@ import io.github.polewright.samples.survey.Survey;
  * <p>A narrow notch needs seconds to catch a line. So that hum and DC are out from the first frame on, the cascade first
  * hears some seconds of the very hum and DC that the survey found at the beginning, extended backwards.
  */
-public final class Stream {
+public final class CleaningStream {
 
     /** Frames a block, as an audio callback might bring. */
     public static final int BLOCK_FRAMES = 256;
@@ -29,7 +29,7 @@ public final class Stream {
     private long framesDone;
     private long nextRetuneFrame;
 
-    public Stream(HumCascade cascade, Survey survey, double sampleRateHz, int channels) {
+    public CleaningStream(HumCascade cascade, Survey survey, double sampleRateHz, int channels) {
         this.cascade = cascade;
         this.survey = survey;
         this.sampleRateHz = sampleRateHz;

@@ -26,6 +26,20 @@ final class Checks {
         }
     }
 
+    /** That a folder can be written in, or made. */
+    static void folder(Path folder) {
+        Path existing = folder.toAbsolutePath().normalize();
+        while (existing.getParent() != null && !Files.exists(existing)) {
+            existing = existing.getParent();
+        }
+        if (!Files.isDirectory(existing)) {
+            throw new Failure("cannot make the folder " + folder + ": " + existing + " is a file");
+        }
+        if (!Files.isWritable(existing)) {
+            throw new Failure("cannot write in the folder " + existing);
+        }
+    }
+
     /** That a file can be written, so that nobody waits in vain. */
     static void writable(Path file) {
         if (Files.isDirectory(file)) {

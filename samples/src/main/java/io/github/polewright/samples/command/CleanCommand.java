@@ -4,7 +4,6 @@ import io.github.polewright.samples.clean.CleanWish;
 import io.github.polewright.samples.clean.Cleaner;
 import io.github.polewright.samples.clean.Cleaning;
 import io.github.polewright.samples.files.Recording;
-import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.report.CleaningText;
 import io.github.polewright.samples.report.Report;
 import io.github.polewright.samples.survey.Survey;
@@ -67,7 +66,7 @@ final class CleanCommand implements Runnable {
         Recording recording = Recording.open(in);
         Checks.writable(out);
         if (report != null) {
-            WholeFile.makeFolder(report);
+            Checks.folder(report);
         }
         Survey survey = Surveyor.survey(recording, wish.mainsHz(), wish.harmonics());
         Cleaning cleaning;

@@ -39,6 +39,7 @@ final class DemoCommand implements Runnable {
 
     @Override
     public void run() {
+        Checks.folder(folder);
         WholeFile.makeFolder(folder);
         double[] scene = Scene.of(RATE_HZ, SECONDS);
         double[] hummed = scene.clone();

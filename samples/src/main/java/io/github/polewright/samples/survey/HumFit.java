@@ -14,6 +14,7 @@ import java.util.Arrays;
 final class HumFit {
 
     private static final int MOST_SEARCHES = 8;
+    private static final double LIKELY_EVIDENCE = 6;
 
     private final Piece piece;
     private final int channels;
@@ -93,6 +94,15 @@ final class HumFit {
             sum += line(c, harmonic, 0)[2];
         }
         return sum;
+    }
+
+    /** The lines that are probably there. */
+    boolean[] likelyLines() {
+        boolean[] likely = new boolean[harmonics + 1];
+        for (int k = 1; k <= harmonics; k++) {
+            likely[k] = evidence(k) > channels + LIKELY_EVIDENCE;
+        }
+        return likely;
     }
 
     /** Looks for the fundamental in steps around where it is; each line counts by its size, not its power, so that

@@ -16,6 +16,7 @@ public final class Surveyor {
     private static final double[] NOMINAL_HZ = {50, 60};
     private static final double SHORTEST_SECONDS = 1;
     private static final double SEARCH_HZ = 0.12;
+    private static final double CLOSER_HZ = 0.025;
     private static final double SEARCH_STEP_HZ = 0.002;
 
     // Speech and music scatter the pieces more than noise would.
@@ -118,6 +119,7 @@ public final class Surveyor {
         for (Piece piece : pieces) {
             HumFit fit = new HumFit(piece, channels, highest, candidateHz);
             fit.searchByAllLines(SEARCH_HZ, SEARCH_STEP_HZ);
+            fit.searchByLines(fit.likelyLines(), CLOSER_HZ, SEARCH_STEP_HZ / 4);
             fits.add(fit);
         }
         Verdict verdict = new Verdict(fits, channels);

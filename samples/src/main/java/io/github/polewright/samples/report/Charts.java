@@ -1,6 +1,7 @@
 package io.github.polewright.samples.report;
 
 import io.github.polewright.Cascade;
+import io.github.polewright.inspect.Response;
 import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.survey.AverageSpectrum;
 import io.github.polewright.samples.survey.HumLine;
@@ -65,9 +66,10 @@ final class Charts {
                 .filter(hz -> hz >= 0 && hz <= toHz)
                 .mapToDouble(hz -> hz)
                 .toArray();
+        Response response = Response.of(cascade);
         double[] gains = new double[hertz.length];
         for (int i = 0; i < hertz.length; i++) {
-            gains[i] = Math.max(-60, ResponseCurve.decibels(cascade, hertz[i]));
+            gains[i] = Math.max(-60, response.db(hertz[i]));
         }
         style(chart.addSeries("gain", hertz, gains), AFTER);
         chart.getStyler().setXAxisMin(0.0);

@@ -128,7 +128,8 @@ final class HumFit {
     private void search(double reachHz, double stepHz, boolean[] lines, boolean bySize) {
         int steps = (int) Math.round(reachHz / stepHz);
         double[] score = new double[2 * steps + 1];
-        int best = 0;
+        // Without any line, all scores are alike and the fundamental stays.
+        int best = steps;
         for (int i = 0; i < score.length; i++) {
             score[i] = score((i - steps) * stepHz, lines, bySize);
             if (score[i] > score[best]) {

@@ -122,9 +122,12 @@ public final class Surveyor {
             fit.searchByLines(fit.likelyLines(), CLOSER_HZ, SEARCH_STEP_HZ / 4);
             fits.add(fit);
         }
-        Verdict verdict = new Verdict(fits, channels);
-        for (HumFit fit : fits) {
-            fit.searchByLines(verdict.there(), 2 * SEARCH_STEP_HZ, SEARCH_STEP_HZ / 20);
+        // A loud note near a high line can mislead the first search; the lines that hold lead back, and more hold then.
+        for (double reachHz : new double[] {2 * CLOSER_HZ, CLOSER_HZ, CLOSER_HZ / 4}) {
+            Verdict verdict = new Verdict(fits, channels);
+            for (HumFit fit : fits) {
+                fit.searchByLines(verdict.there(), reachHz, reachHz / 60);
+            }
         }
         return new Hypothesis(fits, new Verdict(fits, channels));
     }

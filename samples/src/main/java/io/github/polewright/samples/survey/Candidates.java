@@ -12,7 +12,7 @@ final class Candidates {
     private static final int HARMONICS = 20;
     private static final int MOST_MOMENTS = 60;
     private static final double MOST_DB_PER_LINE = 60;
-    private static final int PER_BAND = 2;
+    private static final int PER_BAND = 5;
     private static final double APART_HZ = 0.3;
 
     private Candidates() {}

@@ -90,6 +90,17 @@ final class SurveyorTest {
         assertEquals(59.94, survey.fundamentalHz(), 0.01);
     }
 
+    @ParameterizedTest
+    @ValueSource(longs = {501, 502, 503, 504, 505, 506, 507, 508, 509, 510})
+    void loudNotesDoNotMislead(long seed) {
+        double fundamentalHz = (seed % 2 == 0 ? 50 : 60) + 0.17 * (seed - 505);
+        double[] hum = Sounds.hum(16_000, 5, fundamentalHz, Sounds.scaled(SIZES, 0.03), seed);
+        double[] notes = Sounds.sum(Sounds.notes(16_000, 5, seed), Sounds.noise(16_000, 5, 0.002, seed));
+        Survey survey = survey(16_000, 1, Sounds.sum(notes, hum));
+        assertTrue(survey.humFound());
+        assertEquals(fundamentalHz, survey.fundamentalHz(), 0.005);
+    }
+
     @Test
     void humInAntiPhaseIsFoundAsWell() {
         double[] hum = Sounds.hum(44_100, 6, 50.02, Sounds.scaled(SIZES, 0.01), 8);

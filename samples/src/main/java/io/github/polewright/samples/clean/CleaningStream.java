@@ -7,8 +7,8 @@ import io.github.polewright.samples.survey.Survey;
 /**
  * A live cascade that is led along a recording block by block, its notches kept on the surveyed fundamental.
  *
- * <p>A narrow notch needs seconds to catch a line. So that hum and DC are out from the first frame on, the cascade first
- * hears some seconds of the very hum and DC that the survey found at the beginning, extended backwards.
+ * <p>A narrow notch needs seconds to catch a line. So that hum and DC are out from the first frame on, the cascade
+ * first hears some seconds of the very hum and DC that the survey found at the beginning, extended backwards.
  */
 public final class CleaningStream {
 

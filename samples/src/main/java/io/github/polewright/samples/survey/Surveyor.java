@@ -178,7 +178,7 @@ public final class Surveyor {
     }
 
     /**
-     * Whether the pieces' fundamentals scatter no more than their least variance lets expect: for one line of evidence E
+     * Whether the pieces' fundamentals scatter no more than their least variance lets expect: for a line of evidence E
      * through T seconds that is 6 / E / (2 pi T)^2.
      */
     private boolean isSteady(List<HumFit> fits, boolean[] there, double meanHz) {

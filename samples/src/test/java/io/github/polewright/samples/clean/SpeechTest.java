@@ -216,7 +216,7 @@ final class SpeechTest {
         double before = siSdrDb(late(mixture), late(speech));
         double best = bestToldCombSiSdrDb(mixture, speech, fundamentalHz);
         System.out.printf(
-                "  least %.1f dB, DC %.1e, bands change by at most %.3f dB, SI-SDR %.2f dB (before %.2f, best told %.2f)%n",
+                "  least %.1f dB, DC %.1e, bands within %.3f dB, SI-SDR %.2f dB (before %.2f, best told %.2f)%n",
                 least, dc, changeDb, siSdrDb, before, best);
         assertTrue(least >= 40, "a line is down by " + least + " dB only");
         assertEquals(0, dc, 1e-4);

@@ -169,6 +169,26 @@ final class CommandLineTest {
         assertArrayEquals(Files.readAllBytes(in), Files.readAllBytes(out));
     }
 
+    /** A notch left where the hum was on average would let pass 2 d / width of a line d Hz away: here 0.006 each. */
+    @Test
+    void theNotchesFollowADrift() {
+        double[] noise = Sounds.noise(8000, 60, 0.001, 4);
+        double[] sound = noise.clone();
+        for (int n = 0; n < sound.length; n++) {
+            double t = n / 8000.0;
+            double cycles = 49.97 * t + 0.001 * t * t / 2;
+            for (int k = 1; k <= 6; k++) {
+                sound[n] += 0.05 / k * Math.sin(2 * Math.PI * k * cycles + k);
+            }
+        }
+        Wav.write(in, 8000, 1, 24, false, sound);
+        assertEquals(0, run("clean", in, out), complained);
+        double[] rest = Sounds.sum(Wav.read(out), Sounds.scaled(noise, -1));
+        double atEndRms = Sounds.rms(Arrays.copyOfRange(rest, 50 * 8000, 60 * 8000));
+        System.out.printf("drift of 1 mHz/s: %.5f left of hum of %.3f%n", atEndRms, 0.043);
+        assertEquals(0, atEndRms, 0.002);
+    }
+
     @Test
     void optionsAreHeeded() {
         assertEquals(0, run("clean", in, out, "--harmonics", "2", "--no-dc", "--width", "1", "--mains", "50"));

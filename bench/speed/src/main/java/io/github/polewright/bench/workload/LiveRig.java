@@ -79,7 +79,8 @@ public final class LiveRig extends Rig {
         }
     }
 
-    private void retune() {
+    /** Hands over the next target, as a control thread does. */
+    public void retune() {
         live.retune(targets[retunes++ & 1]);
     }
 

@@ -40,7 +40,7 @@ final class BudgetChart {
             Curve curve = curves.get(i);
             rarest = Math.max(rarest, curve.oneIn().get(curve.oneIn().size() - 1));
             XYSeries series = chart.addSeries(curve.name(), curve.oneIn(), curve.micros());
-            series.setLineColor(COLOURS[i % COLOURS.length]).setMarker(SeriesMarkers.NONE);
+            series.setMarker(SeriesMarkers.NONE).setLineColor(COLOURS[i % COLOURS.length]);
         }
         double periodMicros = chain.periodNanos() / NANOS_PER_MICRO;
         line(chart, "the period", rarest, periodMicros, Color.BLACK);
@@ -61,6 +61,6 @@ final class BudgetChart {
 
     private static void line(XYChart chart, String name, double rarest, double micros, Color colour) {
         XYSeries series = chart.addSeries(name, new double[] {1, rarest}, new double[] {micros, micros});
-        series.setLineColor(colour).setLineStyle(SeriesLines.DASH_DASH).setMarker(SeriesMarkers.NONE);
+        series.setMarker(SeriesMarkers.NONE).setLineColor(colour).setLineStyle(SeriesLines.DASH_DASH);
     }
 }

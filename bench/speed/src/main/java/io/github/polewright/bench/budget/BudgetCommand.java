@@ -82,7 +82,8 @@ public final class BudgetCommand implements Callable<Integer> {
         List<Situation> situations = measure(command, chain);
         Report report = report(chain, situations);
         if (chart != null) {
-            BudgetChart.write(chain, sharePercent, report.curves(), report.machine().jvm(), chart);
+            BudgetChart.write(
+                    chain, sharePercent, report.curves(), report.machine().jvm(), chart);
         }
         return output.end(command, table(chain, situations), report);
     }
@@ -126,8 +127,8 @@ public final class BudgetCommand implements Callable<Integer> {
     }
 
     private static String table(Chain chain, List<Situation> situations) {
-        Table table =
-                new Table("situation", "ns/sample/section", "us/block", "% of period", "p50", "p99", "p99.99", "max us");
+        Table table = new Table(
+                "situation", "ns/sample/section", "us/block", "% of period", "p50", "p99", "p99.99", "max us");
         for (Situation situation : situations) {
             table.add(
                     situation.name(),

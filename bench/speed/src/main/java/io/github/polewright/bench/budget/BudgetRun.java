@@ -61,8 +61,7 @@ record BudgetRun(Chain chain, int forks, int warmSeconds, int seconds) {
         return new Situation(name, mean, times);
     }
 
-    private Statistics one(Class<? extends BlockBenchmark> benchmark, Signal signal, Mode mode)
-            throws RunnerException {
+    private Statistics one(Class<? extends BlockBenchmark> benchmark, Signal signal, Mode mode) throws RunnerException {
         Options options = new OptionsBuilder()
                 .include("^" + Pattern.quote(benchmark.getName() + ".block") + "$")
                 .mode(mode)

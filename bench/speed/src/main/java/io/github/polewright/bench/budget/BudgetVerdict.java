@@ -32,8 +32,8 @@ final class BudgetVerdict {
 
     private static void judge(String name, String what, double micros, double allowed, List<String> complaints) {
         if (!(micros <= allowed)) {
-            complaints.add(String.format(
-                    Locale.ROOT, "%s: %s is %.3g us and may be %.3g us", name, what, micros, allowed));
+            complaints.add(
+                    String.format(Locale.ROOT, "%s: %s is %.3g us and may be %.3g us", name, what, micros, allowed));
         }
     }
 }

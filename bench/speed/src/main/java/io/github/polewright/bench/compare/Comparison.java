@@ -50,11 +50,7 @@ record Comparison(List<Line> lines, List<String> warnings) {
             Row match = old.get(key(row));
             if (match != null && match.low() > 0) {
                 lines.add(new Line(
-                        match,
-                        row,
-                        row.value() / match.value(),
-                        row.low() / match.high(),
-                        row.high() / match.low()));
+                        match, row, row.value() / match.value(), row.low() / match.high(), row.high() / match.low()));
             }
         }
         return new Comparison(lines, warnings(before, after));

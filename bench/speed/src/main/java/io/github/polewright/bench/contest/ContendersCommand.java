@@ -29,9 +29,10 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "contenders",
         mixinStandardHelpOptions = true,
-        description = "The promised ratios: against the textbook cascade of objects, between shapes, signals, formats and"
-                + " motions, and without a fused multiply-add. Taken in turn in one JVM, so that they hold"
-                + " where times do not. Always exit status 0: on a shared machine a ratio informs, it does not judge.")
+        description =
+                "The promised ratios: against the textbook cascade of objects, between shapes, signals, formats and"
+                        + " motions, and without a fused multiply-add. Taken in turn in one JVM, so that they hold"
+                        + " where times do not. Always exit status 0: on a shared machine a ratio informs, it does not judge.")
 public final class ContendersCommand implements Callable<Integer> {
 
     private static final double MOST_WITHOUT_FUSION = 1.35;
@@ -49,7 +50,11 @@ public final class ContendersCommand implements Callable<Integer> {
             description = "Warm-up of a contender (${DEFAULT-VALUE}).")
     private long warmMillis;
 
-    @Option(names = "--rounds", defaultValue = "41", paramLabel = "N", description = "Turns of each (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--rounds",
+            defaultValue = "41",
+            paramLabel = "N",
+            description = "Turns of each (${DEFAULT-VALUE}).")
     private int rounds;
 
     /** For the option parser. */
@@ -92,8 +97,8 @@ public final class ContendersCommand implements Callable<Integer> {
         Map<String, Double> emulated = fork(List.of("-XX:-UseFMA"));
         List<Outcome> outcomes = new ArrayList<>();
         for (Form form : Form.values()) {
-            double ratio = Objects.requireNonNull(emulated.get(form.name()))
-                    / Objects.requireNonNull(fused.get(form.name()));
+            double ratio =
+                    Objects.requireNonNull(emulated.get(form.name())) / Objects.requireNonNull(fused.get(form.name()));
             String name = Goals.prefix(form) + "without FMA / with, by way of the objects";
             outcomes.add(new Outcome(
                     Goal.atMost(name, "", "", MOST_WITHOUT_FUSION), Row.exact(name, "ratio", ratio), ratio));
@@ -102,8 +107,7 @@ public final class ContendersCommand implements Callable<Integer> {
     }
 
     private Map<String, Double> fork(List<String> flags) throws IOException, InterruptedException {
-        List<String> arguments =
-                List.of("contenders-fork", "--warm-millis=" + warmMillis, "--rounds=" + rounds);
+        List<String> arguments = List.of("contenders-fork", "--warm-millis=" + warmMillis, "--rounds=" + rounds);
         return Json.parse(FreshJvm.run(flags, arguments), ContendersFork.Ratios.class)
                 .ratios();
     }

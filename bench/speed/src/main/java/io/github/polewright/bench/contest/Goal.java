@@ -60,9 +60,7 @@ record Goal(String name, String over, String under, double least, double most) {
         if (!promised()) {
             return "-";
         }
-        return least > 0
-                ? String.format(Locale.ROOT, ">= %.2f", least)
-                : String.format(Locale.ROOT, "<= %.2f", most);
+        return least > 0 ? String.format(Locale.ROOT, ">= %.2f", least) : String.format(Locale.ROOT, "<= %.2f", most);
     }
 
     /** What became of it, judged on the median. */

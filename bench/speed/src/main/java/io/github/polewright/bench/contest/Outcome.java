@@ -41,7 +41,8 @@ record Outcome(Goal goal, Row row, double ratioOfLeast) {
 
     static String line(List<Outcome> outcomes) {
         long broken = outcomes.stream().filter(Outcome::broken).count();
-        long promised = outcomes.stream().filter(outcome -> outcome.goal().promised()).count();
+        long promised =
+                outcomes.stream().filter(outcome -> outcome.goal().promised()).count();
         return (promised - broken) + " of " + promised + " promises kept in this run.";
     }
 

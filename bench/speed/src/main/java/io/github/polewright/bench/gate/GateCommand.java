@@ -23,9 +23,10 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "gate",
         mixinStandardHelpOptions = true,
-        description = "What a build may fail on: allocation, the cost of decays and subnormal input over noise, a budget"
-                + " ten times the usual cost, and cost that grows as frames and sections do. Takes about a minute."
-                + " Exit status 0 or 3.")
+        description =
+                "What a build may fail on: allocation, the cost of decays and subnormal input over noise, a budget"
+                        + " ten times the usual cost, and cost that grows as frames and sections do. Takes about a minute."
+                        + " Exit status 0 or 3.")
 public final class GateCommand implements Callable<Integer> {
 
     private static final Duration WARM_UP = Duration.ofMillis(1500);

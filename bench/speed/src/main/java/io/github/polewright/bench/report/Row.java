@@ -30,4 +30,16 @@ public record Row(String name, String unit, double value, double low, double hig
     public static Row exact(String name, String unit, double value) {
         return new Row(name, unit, value, value, value);
     }
+
+    /**
+     * A count.
+     *
+     * @param name what it is of
+     * @param unit of what is counted
+     * @param count how many
+     * @return the row
+     */
+    public static Row count(String name, String unit, long count) {
+        return exact(name, unit, (double) count);
+    }
 }

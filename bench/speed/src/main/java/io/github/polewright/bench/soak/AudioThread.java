@@ -17,6 +17,8 @@ final class AudioThread extends Thread {
     private long blocks;
     private long allocatedBytes;
 
+    /** As sound systems do, asks for the highest priority; a JVM may ignore it, and nothing here relies on it. */
+    @SuppressWarnings("ThreadPriorityCheck")
     AudioThread(Rig rig, long endNanos) {
         super("audio");
         this.rig = rig;
@@ -32,7 +34,6 @@ final class AudioThread extends Thread {
         boolean timed = threads.isCurrentThreadCpuTimeSupported() && threads.isThreadCpuTimeEnabled();
         // Whatever the first calls load and link is not the loop's own.
         Pace.until(System.nanoTime() + periodNanos);
-        lateness.skip(0);
         onProcessor(timed);
         long before = Allocation.bytesSoFar();
         long due = System.nanoTime() + periodNanos;

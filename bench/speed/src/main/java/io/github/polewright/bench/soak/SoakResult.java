@@ -80,10 +80,10 @@ record SoakResult(
         times(rows, "ours, inside process", lateness.ours());
         times(rows, "ours, of which off the processor", lateness.offProcessor());
         times(rows, "the machine's, late to start", lateness.machine());
-        rows.add(Row.exact("blocks", "blocks", blocks));
-        rows.add(Row.exact("deadlines missed by our own work", "blocks", lateness.missedByOurs()));
-        rows.add(Row.exact("deadlines missed by the machine", "blocks", lateness.missedByMachine()));
-        rows.add(Row.exact("allocated on the audio thread", "bytes", allocatedBytes));
+        rows.add(Row.count("blocks", "blocks", blocks));
+        rows.add(Row.count("deadlines missed by our own work", "blocks", lateness.missedByOurs()));
+        rows.add(Row.count("deadlines missed by the machine", "blocks", lateness.missedByMachine()));
+        rows.add(Row.count("allocated on the audio thread", "bytes", allocatedBytes));
         return rows;
     }
 

@@ -209,7 +209,8 @@ class ControlsTest {
         assertEquals(0.92, shortest[1], 5e-3);
         Section first = Sections.notch(50, 1);
         Section second = Sections.notch(60, 1);
-        assertTrue(Glide.between(cascade(first), cascade(second), Pace.FOLLOWING).totalFrames() >= 2 * 1392);
+        assertTrue(
+                Glide.between(cascade(first), cascade(second), Pace.FOLLOWING).totalFrames() >= 2 * 1392);
         assertHeld(List.of(first, second), new int[] {217}, 40 * 217, 31);
     }
 

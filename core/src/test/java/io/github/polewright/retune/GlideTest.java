@@ -10,8 +10,7 @@ import org.junit.jupiter.api.Test;
 
 class GlideTest {
 
-    private static final CascadeDesign LOW_PASS =
-            (frequencyHz, q, gainDb) -> cascade(Sections.lowPass(frequencyHz, q));
+    private static final CascadeDesign LOW_PASS = (frequencyHz, q, gainDb) -> cascade(Sections.lowPass(frequencyHz, q));
 
     private static final CascadeDesign PEAK =
             (frequencyHz, q, gainDb) -> cascade(Sections.peak(frequencyHz, q, gainDb));
@@ -46,12 +45,11 @@ class GlideTest {
 
     @Test
     void hopInsideSevenTenthsOfAWidthMayJump() {
-        Glide glide = Glide.between(
-                cascade(Sections.notch(50, 1)), cascade(Sections.notch(50.69, 1)), Pace.FOLLOWING);
+        Glide glide = Glide.between(cascade(Sections.notch(50, 1)), cascade(Sections.notch(50.69, 1)), Pace.FOLLOWING);
         assertEquals(Certificate.Rule.PAIR, glide.certificate(0).rule());
         assertEquals(1, glide.totalFrames());
-        Glide farther = Glide.between(
-                cascade(Sections.notch(50, 1)), cascade(Sections.notch(50.71, 1)), Pace.FOLLOWING);
+        Glide farther =
+                Glide.between(cascade(Sections.notch(50, 1)), cascade(Sections.notch(50.71, 1)), Pace.FOLLOWING);
         assertEquals(Certificate.Rule.RAMP, farther.certificate(0).rule());
         assertTrue(farther.totalFrames() > 200);
     }
@@ -62,7 +60,9 @@ class GlideTest {
         Cascade to = cascade(Sections.notch(60, 1));
         assertEquals(2 * 2787, Glide.between(from, to, Pace.SINGLE).totalFrames(), 35);
         assertEquals(2787, Glide.between(from, to, Pace.TURNING).totalFrames(), 1);
-        assertEquals(48_000, Glide.between(from, to, Pace.FOLLOWING.atLeastSeconds(1)).totalFrames());
+        assertEquals(
+                48_000,
+                Glide.between(from, to, Pace.FOLLOWING.atLeastSeconds(1)).totalFrames());
         Cascade wide = cascade(Sections.lowPass(1000, 0.7));
         Cascade wider = cascade(Sections.lowPass(1060, 0.7));
         assertEquals(2400, Glide.between(wide, wider, Pace.TURNING).totalFrames());
@@ -79,8 +79,10 @@ class GlideTest {
         assertKnot(Sections.lowPass(200 * Math.pow(2, 1.5), 1.4), sweep, 3, 0, 1e-12);
         assertEquals(400, sweep.frames(2), 1);
         assertEquals(2400, sweep.totalFrames());
-        assertEquals(16, Glide.along(LOW_PASS, new Setting(20, 1, 0), new Setting(20000, 1, 0), Pace.TURNING)
-                .segmentCount());
+        assertEquals(
+                16,
+                Glide.along(LOW_PASS, new Setting(20, 1, 0), new Setting(20000, 1, 0), Pace.TURNING)
+                        .segmentCount());
         Glide raise = Glide.along(PEAK, new Setting(1000, 1, 0), new Setting(1000, 1, 12), Pace.SINGLE);
         assertKnot(Sections.peak(1000, 1, 6), raise, raise.segmentCount() / 2, 0, 1e-12);
     }
@@ -167,9 +169,7 @@ class GlideTest {
         assertEquals(sweep.certificate(0).distance(), moved.certificate(2).distance());
         assertEquals(2, moved.certificate(2).section());
         assertThrows(RefusedGlideException.class, () -> sweep.inSlotsOf(cascade(Section.PASS_THROUGH)));
-        assertThrows(
-                RefusedGlideException.class,
-                () -> sweep.inSlotsOf(Cascade.of(44_100, running.sections())));
+        assertThrows(RefusedGlideException.class, () -> sweep.inSlotsOf(Cascade.of(44_100, running.sections())));
     }
 
     @Test

@@ -19,8 +19,8 @@ class PairingTest {
     private static final int FREE = -1;
 
     private static Cascade comb(int slots, double... centresHz) {
-        List<Section> sections =
-                new ArrayList<>(DoubleStream.of(centresHz).mapToObj(f -> Sections.notch(f, 1)).toList());
+        List<Section> sections = new ArrayList<>(
+                DoubleStream.of(centresHz).mapToObj(f -> Sections.notch(f, 1)).toList());
         while (sections.size() < slots) {
             sections.add(Section.PASS_THROUGH);
         }
@@ -69,8 +69,16 @@ class PairingTest {
             int next = 1 + random.nextInt(10);
             double base = 45 + 20 * random.nextDouble();
             double other = 45 + 20 * random.nextDouble();
-            double[] from = random.ints(1, 20).distinct().limit(count).mapToDouble(k -> k * base).toArray();
-            double[] to = random.ints(1, 20).distinct().limit(next).mapToDouble(k -> k * other).toArray();
+            double[] from = random.ints(1, 20)
+                    .distinct()
+                    .limit(count)
+                    .mapToDouble(k -> k * base)
+                    .toArray();
+            double[] to = random.ints(1, 20)
+                    .distinct()
+                    .limit(next)
+                    .mapToDouble(k -> k * other)
+                    .toArray();
             Pairing pairing = Pairing.of(comb(count + next, from), comb(next, to));
             for (int a = 0; a < count; a++) {
                 for (int b = 0; b < count; b++) {
@@ -102,8 +110,7 @@ class PairingTest {
                 to.add(Sections.random(random));
             }
             Collections.shuffle(from, random);
-            Pairing pairing =
-                    Pairing.of(Cascade.of(Sections.RATE_HZ, from), Cascade.of(Sections.RATE_HZ, to));
+            Pairing pairing = Pairing.of(Cascade.of(Sections.RATE_HZ, from), Cascade.of(Sections.RATE_HZ, to));
             boolean[] seen = new boolean[next];
             for (int slot = 0; slot < slots; slot++) {
                 int target = pairing.target(slot);
@@ -112,7 +119,8 @@ class PairingTest {
                     seen[target] = true;
                 }
                 assertEquals(pairing.isBorn(slot), target >= 0 && from.get(slot).equals(Section.PASS_THROUGH));
-                assertEquals(pairing.isDying(slot), target < 0 && !from.get(slot).equals(Section.PASS_THROUGH));
+                assertEquals(
+                        pairing.isDying(slot), target < 0 && !from.get(slot).equals(Section.PASS_THROUGH));
             }
             for (boolean found : seen) {
                 assertTrue(found);

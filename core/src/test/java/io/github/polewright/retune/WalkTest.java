@@ -55,7 +55,8 @@ class WalkTest {
         assertAt(to.section(1), walk, 1);
         for (int i = 0; i < 2400; i++) {
             double share = (i + 1) / 2400.0;
-            double a1 = from.section(1).a1() + share * (to.section(1).a1() - from.section(1).a1());
+            double a1 = from.section(1).a1()
+                    + share * (to.section(1).a1() - from.section(1).a1());
             assertEquals(a1, frames.get(i)[3], 1e-15);
         }
     }
@@ -152,7 +153,8 @@ class WalkTest {
                 }
             }
             runToEnd(walk);
-            assertEquals(2, submitted.sections().stream().filter(s -> s.a2() != 0).count());
+            assertEquals(
+                    2, submitted.sections().stream().filter(s -> s.a2() != 0).count());
             for (int slot = 0; slot < 2; slot++) {
                 assertAt(submitted.section(slot), walk, slot);
             }

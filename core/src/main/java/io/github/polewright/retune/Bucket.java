@@ -122,8 +122,8 @@ public final class Bucket {
      * @return G; the state has grown at most e^G-fold by changes
      */
     public double level(int section) {
-        settle();
-        return levels[section];
+        // Not settled: when a level is asked for must not change how its sums are rounded.
+        return Math.max(0, levels[section] - leaks[section] * passed);
     }
 
     /** Empties the bucket, as when the state it speaks of is cleared. */

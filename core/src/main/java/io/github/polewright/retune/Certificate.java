@@ -18,6 +18,8 @@ public final class Certificate {
         STILL,
         /** One quadratic norm serves the whole segment, at most 0.7 of the pair limit is used: any walk, even a jump. */
         PAIR,
+        /** The section fades until it passes its input through; its poles are replaced when they ring no more. */
+        EXCHANGE,
         /** The ramp takes at least as many frames as its hyperbolic length needs. */
         RAMP
     }
@@ -121,6 +123,7 @@ public final class Certificate {
         String what =
                 switch (rule) {
                     case STILL -> "the poles stay";
+                    case EXCHANGE -> "it fades, and another is born in its place";
                     case PAIR ->
                         decimals("the poles move by d = %.3g and may jump, one norm contracts all the way", distance);
                     case RAMP ->

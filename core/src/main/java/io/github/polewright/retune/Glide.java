@@ -24,6 +24,7 @@ public final class Glide {
     private final double[][] leaks;
     private final long movingFrames;
     private final Certificate[] certificates;
+    private final boolean still;
 
     Glide(
             Cascade from,
@@ -40,6 +41,7 @@ public final class Glide {
         this.leaks = leaks;
         this.movingFrames = movingFrames;
         this.certificates = certificates;
+        this.still = from.equals(target);
     }
 
     /**
@@ -54,6 +56,25 @@ public final class Glide {
      */
     public static Glide between(Cascade from, Cascade to, Pace pace) {
         return GlidePlan.straight(from, to, pace);
+    }
+
+    /**
+     * A glide that is even in log frequency, log Q and decibels whatever the sections are, between cascades whose
+     * sections are paired as {@link Pairing} says: the right default for wide moves.
+     *
+     * <p>It is geometric in the coefficients of the analogue sections that the bilinear transform would turn into the two
+     * ends: for a low-pass, high-pass, band-pass, notch, peak or shelf of the second order that is the same as moving
+     * its frequency, Q and gain. A coefficient that is 0 at one end or changes its sign goes in a straight line. Every
+     * knot is stable. Knots as in {@link #along}. Derived for this project.
+     *
+     * @param from the running cascade, one section a slot, free slots being {@link Section#PASS_THROUGH}
+     * @param to where to go, with at most as many sections
+     * @param pace how long and how evenly
+     * @return the glide
+     * @throws RefusedGlideException as {@link #between}
+     */
+    public static Glide sweeping(Cascade from, Cascade to, Pace pace) {
+        return GlidePlan.sweeping(from, to, pace);
     }
 
     /**
@@ -192,7 +213,12 @@ public final class Glide {
 
     /** Whether both ends are the same. */
     boolean isStill() {
-        return from.equals(target);
+        return still;
+    }
+
+    /** Whether a slot's section fades out and another is born in its place. */
+    boolean isExchanged(int section) {
+        return certificates[section].rule() == Certificate.Rule.EXCHANGE;
     }
 
     /** How many frames pass until the last coefficient has stopped. */

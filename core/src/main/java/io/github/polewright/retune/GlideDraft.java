@@ -66,16 +66,23 @@ final class GlideDraft {
             shortest[i] += needed;
             least = Math.max(least, needed);
         }
-        movingFrames += least;
         add(knot, least, distance, leak);
+        movingFrames = frames.stream().mapToLong(Integer::longValue).sum();
     }
 
     Glide finish(Cascade from, Cascade target, long[] certified, boolean straight) {
+        return finish(from, target, certified, straight, new boolean[sections]);
+    }
+
+    /** Exchanged sections are other ones after the hold than before. */
+    Glide finish(Cascade from, Cascade target, long[] certified, boolean straight, boolean[] exchanged) {
         int[] lengths = frames.stream().mapToInt(Integer::intValue).toArray();
         Knots path = new Knots(lengths, knots.toArray(new double[0][]));
         Certificate[] certificates = new Certificate[sections];
         for (int i = 0; i < sections; i++) {
-            certificates[i] = certificate(i, path, certified[i], straight);
+            certificates[i] = exchanged[i]
+                    ? new Certificate(i, Certificate.Rule.EXCHANGE, 0, 1, 0, path)
+                    : certificate(i, path, certified[i], straight);
         }
         return new Glide(
                 from,

@@ -16,64 +16,54 @@ final class GlidePlan {
     private static final int LEAST_GENTLE_FRAMES = 8;
     private static final double LONGEST_FRAMES = 1 << 30;
 
-    /** The amplitude left of what a dying section still rings when it is swapped out: -120 dB. */
-    private static final double DECAYED = 1e-6;
-
     private static final int WIDTH = Knots.WIDTH;
 
     private GlidePlan() {}
 
     static Glide straight(Cascade from, Cascade to, Pace pace) {
-        if (from.sampleRateHz() != to.sampleRateHz()) {
-            throw new RefusedGlideException(
-                    -1, "the target's sampleRateHz is " + to.sampleRateHz() + "; it must be " + from.sampleRateHz());
+        Changes changes = Changes.between(from, to);
+        double octaves = widestOctaves(changes.start(), changes.end());
+        return glide(from, changes, share -> mix(changes.start(), changes.end(), share), 1, octaves, pace);
+    }
+
+    static Glide sweeping(Cascade from, Cascade to, Pace pace) {
+        Changes changes = Changes.between(from, to);
+        double octaves = Analogue.widestOctaves(changes.start(), changes.end());
+        return glide(
+                from,
+                changes,
+                share -> Analogue.mix(changes.start(), changes.end(), share),
+                legs(octaves),
+                octaves,
+                pace);
+    }
+
+    /** Births at once, the moves, then a wait for what dies, and a second move for what is born in its place. */
+    private static Glide glide(
+            Cascade from, Changes changes, DoubleFunction<double[]> path, int legs, double octaves, Pace pace) {
+        boolean straight = legs == 1;
+        GlideDraft shortestWay = new GlideDraft(changes.start());
+        walk(shortestWay, path, legs, straight, 0, false);
+        double wish = pace.frames(from.sampleRateHz(), (double) most(shortestWay.shortest()), octaves);
+        GlideDraft draft = new GlideDraft(changes.first());
+        if (changes.hasBirths()) {
+            draft.swap(changes.start());
         }
-        Pairing pairing = Pairing.of(from, to);
-        double[] first = flat(from);
-        double[] start = first.clone();
-        double[] end = first.clone();
-        double[] last = first.clone();
-        boolean births = false;
-        int hold = 0;
-        for (int slot = 0; slot < from.sectionCount(); slot++) {
-            int target = pairing.target(slot);
-            if (target >= 0) {
-                put(end, slot, to.section(target));
-                put(last, slot, to.section(target));
-                if (pairing.isBorn(slot)) {
-                    becomeTransparent(
-                            start,
-                            slot,
-                            to.section(target).a1(),
-                            to.section(target).a2());
-                    births = true;
-                }
-            } else if (pairing.isDying(slot)) {
-                Section old = from.section(slot);
-                becomeTransparent(end, slot, old.a1(), old.a2());
-                put(last, slot, Section.PASS_THROUGH);
-                hold = Math.max(hold, decayFrames(slot, old));
-            }
+        walk(draft, path, legs, straight, wish, pace.isGentle());
+        long[] shortest = straight ? shortestWay.shortest() : draft.shortest();
+        if (changes.holdFrames() > 0) {
+            draft.hold(changes.holdFrames());
+            draft.swap(changes.swapped());
         }
-        Cascade target = cascade(from.sampleRateHz(), last);
-        GlideDraft draft = new GlideDraft(first);
-        if (births) {
-            draft.swap(start);
+        if (changes.hasExchanges()) {
+            walk(draft, share -> mix(changes.swapped(), changes.last(), share), 1, true, wish, pace.isGentle());
         }
-        long[] shortest = shortestStraight(start, end);
-        double octaves = widestOctaves(start, end);
-        walk(
-                draft,
-                share -> mix(start, end, share),
-                1,
-                true,
-                pace.frames(from.sampleRateHz(), (double) most(shortest), octaves),
-                pace.isGentle());
-        if (hold > 0) {
-            draft.hold(hold);
-            draft.swap(last);
-        }
-        return draft.finish(from, target, shortest, true);
+        return draft.finish(
+                from, cascade(from.sampleRateHz(), changes.last()), shortest, straight, changes.exchanged());
+    }
+
+    private static int legs(double octaves) {
+        return (int) Math.max(1, Math.min(MOST_LEGS, Math.ceil(2 * octaves)));
     }
 
     static Glide along(CascadeDesign design, Setting from, Setting to, Pace pace) {
@@ -82,7 +72,7 @@ final class GlidePlan {
         requireAlike(first, first, from);
         requireAlike(first, last, to);
         double octaves = from.octavesTo(to);
-        int legs = (int) Math.max(1, Math.min(MOST_LEGS, Math.ceil(2 * octaves)));
+        int legs = legs(octaves);
         DoubleFunction<double[]> path = share -> {
             Setting at = from.towards(to, share);
             Cascade knot = design.design(at.frequencyHz(), at.q(), at.gainDb());
@@ -134,11 +124,6 @@ final class GlidePlan {
                             + " are possible");
         }
         return (int) Math.ceil(frames);
-    }
-
-    private static int decayFrames(int slot, Section section) {
-        double decay = Poles.decay(section.a1(), section.a2());
-        return 1 + wholeFrames(slot, Math.log(DECAYED) / Math.log1p(-decay));
     }
 
     private static void requireAlike(Cascade first, Cascade knot, Setting at) {
@@ -200,22 +185,12 @@ final class GlidePlan {
         return Cascade.of(sampleRateHz, sections);
     }
 
-    private static void put(double[] flat, int slot, Section section) {
+    static void put(double[] flat, int slot, Section section) {
         int at = slot * WIDTH;
         flat[at] = section.b0();
         flat[at + 1] = section.b1();
         flat[at + 2] = section.b2();
         flat[at + 3] = section.a1();
         flat[at + 4] = section.a2();
-    }
-
-    /** b = a: the section passes its input through whatever its poles. */
-    private static void becomeTransparent(double[] flat, int slot, double a1, double a2) {
-        int at = slot * WIDTH;
-        flat[at] = 1;
-        flat[at + 1] = a1;
-        flat[at + 2] = a2;
-        flat[at + 3] = a1;
-        flat[at + 4] = a2;
     }
 }

@@ -40,8 +40,14 @@ final class Knots {
         double[] c = coefficients[first];
         ForcedBound bound = new ForcedBound(c[at], c[at + 1], c[at + 2], c[at + 3], c[at + 4]);
         double worst = bound.rest();
-        for (int segment = first; segment < frames.length && frames[segment] > 0; segment++) {
-            worst = Math.max(worst, along(bound, segment, at));
+        for (int segment = first; segment < frames.length; segment++) {
+            if (frames[segment] == 0) {
+                // What rang is gone, and another section begins where the signal passes through.
+                double[] next = coefficients[segment + 1];
+                bound = new ForcedBound(next[at], next[at + 1], next[at + 2], next[at + 3], next[at + 4]);
+            } else {
+                worst = Math.max(worst, along(bound, segment, at));
+            }
         }
         return Math.max(worst, bound.rest());
     }
@@ -67,6 +73,7 @@ final class Knots {
 
     /** Exact at both ends. */
     static double mix(double from, double to, double share) {
-        return share >= 1 ? to : Math.fma(share, to - from, from);
+        // Not fused: where the hardware has no such instruction, Math.fma allocates, and audio threads come here.
+        return share >= 1 ? to : share * (to - from) + from;
     }
 }

@@ -16,25 +16,28 @@ import java.util.Arrays;
  * frequency by dynamic programming, so that no notch of a comb that gains or loses some is dragged past another; other
  * cascades by the Hungarian method. Common practice but for the costs, which were chosen for this project.
  *
- * <p>Where a birth finds no slot, the closest leftovers are paired whatever their distance. A live cascade with a few
- * slots to spare avoids that.
+ * <p>Sections that hold back an end of the band, such as a low-pass or a shelf, are paired at any distance, since one
+ * that faded would let through what it is there to hold back. Where a birth finds no slot, the closest leftovers are
+ * paired too; if both are notches or bells, the one fades and the other is then born in its slot.
  *
  * <p><b>Threads</b> immutable. <b>Errors</b> see {@link #of}.
  */
 public final class Pairing {
 
     static final double END_COST = 0.35;
-    private static final double FARTHEST = 2 * END_COST;
+    static final double FARTHEST = 2 * END_COST;
     private static final double ZERO_SHARE = 0.05;
 
     private final int[] targets;
     private final boolean[] born;
     private final boolean[] dying;
+    private final boolean[] exchanged;
 
-    private Pairing(int[] targets, boolean[] born, boolean[] dying) {
+    private Pairing(int[] targets, boolean[] born, boolean[] dying, boolean[] exchanged) {
         this.targets = targets;
         this.born = born;
         this.dying = dying;
+        this.exchanged = exchanged;
     }
 
     /**
@@ -62,7 +65,7 @@ public final class Pairing {
                 ? alignByAngle(from, olds, to, news, costs)
                 : Assignment.solve(costs, END_COST);
         fillUp(matches, costs, from.sectionCount() - olds.length);
-        return place(from.sectionCount(), olds, news, matches);
+        return place(from, olds, to, news, matches);
     }
 
     /**
@@ -95,6 +98,16 @@ public final class Pairing {
         return dying[slot];
     }
 
+    /**
+     * Whether a slot's section fades out and its target is then born in the same slot.
+     *
+     * @param slot its index in the running cascade
+     * @return true for a notch or bell that is too far from its target
+     */
+    public boolean isExchanged(int slot) {
+        return exchanged[slot];
+    }
+
     private static int[] present(Cascade cascade) {
         int[] found = new int[cascade.sectionCount()];
         int count = 0;
@@ -122,10 +135,20 @@ public final class Pairing {
                 Section b = to.section(news[j]);
                 double distance = Distance.between(a, b);
                 double cost = distance + ZERO_SHARE * zeroMovement(a, b);
-                costs[i][j] = distance < FARTHEST ? cost : cost + Assignment.FAR;
+                if (opensBothEnds(a) || opensBothEnds(b)) {
+                    costs[i][j] = distance < FARTHEST ? cost : cost + Assignment.FAR;
+                } else {
+                    // A low-pass that fades lets through what it is there to hold back: it sweeps, however far.
+                    costs[i][j] = FARTHEST * cost / (1 + cost);
+                }
             }
         }
         return costs;
+    }
+
+    private static boolean opensBothEnds(Section section) {
+        return Transparency.opensBothEnds(
+                new double[] {section.b0(), section.b1(), section.b2(), section.a1(), section.a2()}, 0);
     }
 
     private static double zeroMovement(Section from, Section to) {
@@ -211,7 +234,8 @@ public final class Pairing {
         }
     }
 
-    private static Pairing place(int slots, int[] olds, int[] news, int[] matches) {
+    private static Pairing place(Cascade from, int[] olds, Cascade to, int[] news, int[] matches) {
+        int slots = from.sectionCount();
         int[] targets = new int[slots];
         boolean[] born = new boolean[slots];
         boolean[] dying = new boolean[slots];
@@ -226,17 +250,39 @@ public final class Pairing {
                 placed[matches[i]] = true;
             }
         }
-        int slot = 0;
-        for (int j = 0; j < news.length; j++) {
-            if (!placed[j]) {
-                while (occupied[slot]) {
-                    slot++;
+        // A birth takes the slot of its own number if that is free: what was bypassed comes back where it was.
+        for (int pass = 0; pass < 2; pass++) {
+            for (int j = 0; j < news.length; j++) {
+                int slot = pass == 0 ? Math.min(news[j], slots - 1) : firstFree(occupied);
+                if (!placed[j] && slot < slots && !occupied[slot]) {
+                    placed[j] = true;
+                    occupied[slot] = true;
+                    born[slot] = true;
+                    targets[slot] = news[j];
                 }
-                occupied[slot] = true;
-                born[slot] = true;
-                targets[slot] = news[j];
             }
         }
-        return new Pairing(targets, born, dying);
+        return new Pairing(targets, born, dying, exchanges(from, to, targets, born));
+    }
+
+    private static int firstFree(boolean[] occupied) {
+        int slot = 0;
+        while (slot < occupied.length && occupied[slot]) {
+            slot++;
+        }
+        return slot;
+    }
+
+    private static boolean[] exchanges(Cascade from, Cascade to, int[] targets, boolean[] born) {
+        boolean[] exchanged = new boolean[targets.length];
+        for (int slot = 0; slot < targets.length; slot++) {
+            if (targets[slot] >= 0 && !born[slot]) {
+                Section old = from.section(slot);
+                Section target = to.section(targets[slot]);
+                exchanged[slot] =
+                        opensBothEnds(old) && opensBothEnds(target) && Distance.between(old, target) >= FARTHEST;
+            }
+        }
+        return exchanged;
     }
 }

@@ -72,7 +72,7 @@ final class Poles {
         }
         double height = 0.5 * gap;
         double ratio = heightSquared / height;
-        return 1 - 0.5 * (Math.hypot(a1, height + ratio) + Math.abs(height - ratio));
+        return 1 - 0.5 * (Math.sqrt(a1 * a1 + (height + ratio) * (height + ratio)) + Math.abs(height - ratio));
     }
 
     /**

@@ -7,15 +7,16 @@ import java.util.Arrays;
  * Goes along glides frame by frame on the audio thread: says for each stretch of frames from where and by which step the
  * coefficients move, holds them where the bucket does not admit the next segment yet, and lands exactly on each knot.
  *
- * <p>A stretch begins with {@link #next}. Coefficient c of its frame i (0 is its first) is
- * {@code fma(position() + 1 + i, steps()[c], bases()[c])}; coefficients change before the sample. While
+ * <p>A stretch begins with {@link #next} and ends with {@link #arrive}. Coefficient c of its frame i (0 is its first) is
+ * {@code bases()[c] + (position() + 1 + i) * steps()[c]}; coefficients change before the sample. While
  * {@link #isSettled()} is false the sections must run in direct form I arithmetic, whatever the form: the bounds of the
  * certificates hold for it, and it passes a constant exactly wherever both ends do.
  *
- * <p>A glide may be adopted in the middle of another. Slots that are where it begins follow it; any other slot goes
- * from where it is now to the same end, by a share that grows with time, and each of its segments is charged to the
- * bucket from here, by a bound of its distance that needs no logarithm. A slot that passes through is born with the
- * poles it is to have; one that shall pass through keeps its poles and fades to b = a.
+ * <p>A glide may be adopted in the middle of another. Slots that are where it begins follow it; any other slot goes from
+ * where it is now to the same end, in as many times the glide's frames as that distance needs, and each of its segments
+ * is charged to the bucket from here. A slot that passes through is born with the poles it is to have; one that shall
+ * pass through keeps its poles, fades to b = a and is freed once it rings no more. A notch or bell farther than d = 0.7
+ * from its target is not dragged there: it fades, waits until it rings no more, and the target is born in its slot.
  *
  * <p><b>Units</b> frames. <b>Threads</b> one, the audio thread. <b>Allocation</b> none after construction. <b>Numbers</b>
  * where a stretch is cut, by {@code mostFrames} or the caller's blocks, changes nothing.
@@ -27,23 +28,24 @@ public final class Walk {
     private final double sampleRateHz;
     private final int slots;
     private final Bucket bucket;
+    private final SlotAims aims;
     private final double[] bases;
     private final double[] steps;
-    private final double[] origins;
-    private final double[] goals;
-    private final double[] distances;
-    private final double[] leaks;
-    private final boolean[] joined;
-    private final boolean[] fading;
 
     private Glide glide;
     private boolean isSettled = true;
     private boolean isWalking;
+    private boolean isMoving;
+    private boolean isWaiting;
+    private boolean isRising;
     private int segment;
-    private long behind;
     private int length;
     private int done;
     private int position;
+    private long planned;
+    private long walked;
+    private long held;
+    private double highestLevel;
 
     /**
      * A walk that stands still.
@@ -61,12 +63,7 @@ public final class Walk {
         bucket = new Bucket(slots, limit);
         bases = GlidePlan.flat(start);
         steps = new double[bases.length];
-        origins = new double[bases.length];
-        goals = new double[bases.length];
-        distances = new double[slots];
-        leaks = new double[slots];
-        joined = new boolean[slots];
-        fading = new boolean[slots];
+        aims = new SlotAims(slots, bases);
         glide = Glide.between(start, start, Pace.FOLLOWING);
         standStill();
     }
@@ -75,29 +72,26 @@ public final class Walk {
      * Takes over a glide from where the coefficients are now. Whatever was left of an earlier one is dropped.
      *
      * @param next the glide to walk
-     * @throws IllegalArgumentException if its sample rate or number of sections is not the one of this walk
+     * @return false, with nothing changed, if its sample rate or number of sections is not the one of this walk
      */
-    public void adopt(Glide next) {
+    public boolean adopt(Glide next) {
         if (next.sectionCount() != slots || next.from().sampleRateHz() != sampleRateHz) {
-            throw new IllegalArgumentException("next has " + next.sectionCount() + " sections at "
-                    + next.from().sampleRateHz() + " Hz; it must have " + slots + " at " + sampleRateHz + " Hz");
+            return false;
         }
         stopHere();
         glide = next;
         segment = 0;
-        behind = 0;
-        System.arraycopy(bases, 0, origins, 0, bases.length);
-        boolean allJoined = true;
-        double[] first = next.knot(0);
+        isWaiting = false;
+        isRising = false;
+        boolean allJoined = aims.enter(next);
+        highestLevel = 0;
         for (int slot = 0; slot < slots; slot++) {
-            fading[slot] = false;
-            joined[slot] = isSame(first, slot);
-            if (!joined[slot]) {
-                allJoined = false;
-                enter(slot);
-            }
+            highestLevel = Math.max(highestLevel, bucket.level(slot));
         }
+        planned = aims.plannedFrames(next);
+        walked = 0;
         isSettled = allJoined && next.isStill();
+        return true;
     }
 
     /**
@@ -108,8 +102,8 @@ public final class Walk {
      * @return how many it has, from 1 to {@code mostFrames}
      */
     public int next(int mostFrames) {
+        arrive();
         if (!isSettled && done == length) {
-            land();
             prepare();
         }
         position = done;
@@ -117,6 +111,21 @@ public final class Walk {
         done += isSettled ? 0 : frames;
         bucket.pass(frames);
         return frames;
+    }
+
+    /**
+     * Ends a stretch whose frames have been run: where it led to a knot, the coefficients now are that knot's, and after
+     * the last one the walk has settled.
+     */
+    public void arrive() {
+        if (isSettled || done < length) {
+            return;
+        }
+        land();
+        if (isOver()) {
+            isSettled = true;
+            standStill();
+        }
     }
 
     /**
@@ -156,6 +165,44 @@ public final class Walk {
     }
 
     /**
+     * Whether the coefficients stand still in the present stretch: settled, held back, or waiting for a section to ring
+     * no more.
+     *
+     * @return true if every step is 0
+     */
+    public boolean isStandingStill() {
+        return !isMoving;
+    }
+
+    /**
+     * Frames until the walk has settled, if nothing is held back on the way.
+     *
+     * @return frames, 0 once settled
+     */
+    public long framesLeft() {
+        return isSettled ? 0 : Math.max(1, planned - walked - (isWalking ? done : 0));
+    }
+
+    /**
+     * Frames for which the bucket has held coefficients back since the walk began.
+     *
+     * @return a count that only grows
+     */
+    public long framesHeld() {
+        return held + (isSettled || isWalking ? 0 : done);
+    }
+
+    /**
+     * The highest level any slot's bucket has reached since the latest glide was adopted: changes of whatever age have
+     * multiplied the state of every section by at most e to this power.
+     *
+     * @return a natural logarithm, 0 or more
+     */
+    public double highestLevel() {
+        return highestLevel;
+    }
+
+    /**
      * The level G of a slot's bucket: recent changes have multiplied its state by at most e^G.
      *
      * @param slot its index
@@ -175,6 +222,7 @@ public final class Walk {
 
     private void standStill() {
         isWalking = false;
+        isMoving = false;
         length = 0;
         done = 0;
         Arrays.fill(steps, 0);
@@ -189,131 +237,81 @@ public final class Walk {
         if (done == length) {
             land();
         }
+        if (!isWalking) {
+            held += done;
+        }
         for (int i = 0; i < bases.length; i++) {
-            bases[i] = Math.fma(done, steps[i], bases[i]);
+            bases[i] += done * steps[i];
         }
         standStill();
     }
 
     private void land() {
         if (isWalking) {
-            System.arraycopy(goals, 0, bases, 0, bases.length);
-            behind += length;
-            segment++;
-            for (int slot = 0; slot < slots; slot++) {
-                joined[slot] |= !fading[slot] && behind >= glide.movingFrames();
+            System.arraycopy(aims.goals(), 0, bases, 0, bases.length);
+            walked += length;
+            if (isWaiting || isRising) {
+                finishTail();
+            } else {
+                aims.pass(glide, segment);
+                segment++;
             }
+        } else {
+            held += length;
         }
         isWalking = false;
+        isMoving = false;
         length = 0;
         done = 0;
         Arrays.fill(steps, 0);
     }
 
-    private boolean isSame(double[] knot, int slot) {
-        int at = slot * WIDTH;
-        for (int i = at; i < at + WIDTH; i++) {
-            if (bases[i] != knot[i]) {
-                return false;
-            }
-        }
-        return true;
+    /** After the wait the freed slots pass through and the exchanged ones rise, after the rise all is done. */
+    private void finishTail() {
+        isRising = isWaiting && aims.exchange(glide);
+        isWaiting = false;
     }
 
-    /** A slot that is not where the glide begins. */
-    private void enter(int slot) {
-        int first = 0;
-        while (glide.frames(first) == 0) {
-            first++;
+    private boolean isOver() {
+        while (segment < glide.segmentCount() && glide.frames(segment) == 0) {
+            segment++;
+            aims.swap(glide, segment);
         }
-        double[] knot = glide.knot(first + 1);
-        int at = slot * WIDTH;
-        fading[slot] = isPassThrough(knot, at);
-        if (isPassThrough(bases, at)) {
-            origins[at + 1] = knot[at + 3];
-            origins[at + 2] = knot[at + 4];
-            origins[at + 3] = knot[at + 3];
-            origins[at + 4] = knot[at + 4];
-            System.arraycopy(origins, at, bases, at, WIDTH);
-        }
-    }
-
-    private static boolean isPassThrough(double[] knot, int at) {
-        return knot[at] == 1 && knot[at + 1] == 0 && knot[at + 2] == 0 && knot[at + 3] == 0 && knot[at + 4] == 0;
+        return segment == glide.segmentCount() && !isRising && !aims.isRinging();
     }
 
     private void prepare() {
-        while (segment < glide.segmentCount() && glide.frames(segment) == 0) {
-            swap();
-        }
-        if (segment == glide.segmentCount()) {
+        if (isOver()) {
             isSettled = true;
             standStill();
-            return;
-        }
-        boolean admitted = true;
-        for (int slot = 0; slot < slots; slot++) {
-            aim(slot);
-            admitted &= bucket.admits(slot, distances[slot]);
-        }
-        if (admitted) {
-            start();
+        } else if (isRising) {
+            aims.rise(glide);
+            start(aims.risingFrames(glide));
+        } else if (segment == glide.segmentCount()) {
+            isWaiting = true;
+            aims.stay();
+            start(aims.decayFrames());
+        } else if (aims.aim(glide, segment, bucket)) {
+            start(aims.frames(glide, segment));
         } else {
             hold();
         }
     }
 
-    private void swap() {
-        segment++;
-        for (int slot = 0; slot < slots; slot++) {
-            if (joined[slot]) {
-                System.arraycopy(glide.knot(segment), slot * WIDTH, bases, slot * WIDTH, WIDTH);
-            }
-        }
-    }
-
-    /** Where the slot is at the end of the present segment, and what that costs. */
-    private void aim(int slot) {
-        int at = slot * WIDTH;
-        double[] knot = glide.knot(segment + 1);
-        if (joined[slot]) {
-            System.arraycopy(knot, at, goals, at, WIDTH);
-            distances[slot] = glide.distance(segment, slot);
-            leaks[slot] = glide.leak(segment, slot);
-            return;
-        }
-        double share = (double) (behind + glide.frames(segment)) / glide.movingFrames();
-        for (int i = 0; i < WIDTH; i++) {
-            goals[at + i] = Knots.mix(origins[at + i], knot[at + i], share);
-        }
-        if (fading[slot]) {
-            goals[at] = Knots.mix(origins[at], 1, share);
-            goals[at + 1] = Knots.mix(origins[at + 1], origins[at + 3], share);
-            goals[at + 2] = Knots.mix(origins[at + 2], origins[at + 4], share);
-            goals[at + 3] = origins[at + 3];
-            goals[at + 4] = origins[at + 4];
-        }
-        distances[slot] = Distance.upperBound(bases[at + 3], bases[at + 4], goals[at + 3], goals[at + 4]);
-        leaks[slot] = Bucket.leak(bases[at + 3], bases[at + 4], goals[at + 3], goals[at + 4]);
-    }
-
-    private void start() {
-        length = glide.frames(segment);
+    private void start(int frames) {
+        length = frames;
         isWalking = true;
-        for (int slot = 0; slot < slots; slot++) {
-            bucket.charge(slot, distances[slot]);
-            bucket.leakAt(slot, leaks[slot]);
-        }
+        highestLevel = Math.max(highestLevel, aims.charge(bucket));
+        double[] goals = aims.goals();
         for (int i = 0; i < steps.length; i++) {
             steps[i] = (goals[i] - bases[i]) / length;
+            isMoving |= steps[i] != 0;
         }
     }
 
     /** Stands still for as many frames as the fullest bucket needs. */
     private void hold() {
         standStill();
-        for (int slot = 0; slot < slots; slot++) {
-            length = Math.max(length, bucket.framesUntil(slot, distances[slot]));
-        }
+        length = aims.framesUntilAdmitted(bucket);
     }
 }

@@ -178,12 +178,8 @@ class WalkTest {
         double leak = -0.25 * Math.log(first.section(0).a2());
         assertEquals(0.09117 - 2000 * leak, walk.level(0), 1e-4);
         double level = walk.level(0);
-        Section now = Section.of(
-                1,
-                0,
-                0,
-                Math.fma(2000, walk.steps()[3], walk.bases()[3]),
-                Math.fma(2000, walk.steps()[4], walk.bases()[4]));
+        Section now =
+                Section.of(1, 0, 0, walk.bases()[3] + 2000 * walk.steps()[3], walk.bases()[4] + 2000 * walk.steps()[4]);
         double back = Distance.between(now, first.section(0)) / 2;
         walk.adopt(Glide.between(second, first, Pace.FOLLOWING));
         int held = 0;
@@ -248,9 +244,9 @@ class WalkTest {
         Cascade first = cascade(Sections.notch(50, 1));
         Walk walk = new Walk(first, LIMIT);
         Cascade wide = cascade(Sections.notch(50, 1), Section.PASS_THROUGH);
-        assertThrows(IllegalArgumentException.class, () -> walk.adopt(Glide.between(wide, wide, Pace.SINGLE)));
+        assertFalse(walk.adopt(Glide.between(wide, wide, Pace.SINGLE)));
         Cascade other = Cascade.of(44_100, first.section(0));
-        assertThrows(IllegalArgumentException.class, () -> walk.adopt(Glide.between(other, other, Pace.SINGLE)));
+        assertFalse(walk.adopt(Glide.between(other, other, Pace.SINGLE)));
         assertTrue(walk.isSettled());
         assertThrows(IllegalArgumentException.class, () -> new Walk(cascade(Section.of(1, 0, 0, 0, 2)), LIMIT));
     }

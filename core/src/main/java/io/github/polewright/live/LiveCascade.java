@@ -353,6 +353,7 @@ public final class LiveCascade {
             engine.gain().moveTo(latest.gain());
             order = latest;
             adopted++;
+            orders.adoptedRelease(latest);
         }
     }
 

@@ -16,6 +16,11 @@ import io.github.polewright.retune.Glide;
  */
 record Order(long number, Glide glide, long glideNumber, Cascade wish, boolean bypassed, double gain) {
 
+    /** Where the coefficients go, one section a slot. */
+    Cascade heading() {
+        return glide.target();
+    }
+
     /** While bypassed the wish changes and nothing is heard of it. */
     Order retuned(Glide next) {
         Cascade target = next.target();

@@ -25,6 +25,8 @@ public final class Glide {
     private final long movingFrames;
     private final Certificate[] certificates;
     private final boolean still;
+    private final int sectionCount;
+    private final double sampleRateHz;
 
     Glide(
             Cascade from,
@@ -42,6 +44,8 @@ public final class Glide {
         this.movingFrames = movingFrames;
         this.certificates = certificates;
         this.still = from.equals(target);
+        this.sectionCount = from.sectionCount();
+        this.sampleRateHz = from.sampleRateHz();
     }
 
     /**
@@ -117,7 +121,16 @@ public final class Glide {
      * @return the number of sections at every knot
      */
     public int sectionCount() {
-        return from.sectionCount();
+        return sectionCount;
+    }
+
+    /**
+     * The sample rate of all its knots.
+     *
+     * @return hertz
+     */
+    public double sampleRateHz() {
+        return sampleRateHz;
     }
 
     /**

@@ -75,7 +75,7 @@ public final class Walk {
      * @return false, with nothing changed, if its sample rate or number of sections is not the one of this walk
      */
     public boolean adopt(Glide next) {
-        if (next.sectionCount() != slots || next.from().sampleRateHz() != sampleRateHz) {
+        if (next.sectionCount() != slots || next.sampleRateHz() != sampleRateHz) {
             return false;
         }
         stopHere();

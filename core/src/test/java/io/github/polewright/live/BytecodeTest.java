@@ -43,7 +43,8 @@ class BytecodeTest {
             "java/nio/ByteOrder.nativeOrder",
             "java/util/Arrays.fill",
             "java/util/concurrent/atomic/AtomicLong.setRelease",
-            "java/util/concurrent/atomic/AtomicReference.getAcquire");
+            "java/util/concurrent/atomic/AtomicReference.getAcquire",
+            "java/util/concurrent/atomic/AtomicReference.setRelease");
 
     /** What a refusal may call besides, for its message. */
     private static final String TEXT = "java/lang/String.valueOf";

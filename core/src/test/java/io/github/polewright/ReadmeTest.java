@@ -1,6 +1,5 @@
 package io.github.polewright;
 
-import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.File;
@@ -12,7 +11,6 @@ import java.net.URL;
 import java.net.URLClassLoader;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.Arrays;
 import java.util.List;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -100,12 +98,6 @@ class ReadmeTest {
         Matcher blocks = Pattern.compile("```java\n(final class HumFreeInput .*?)```", Pattern.DOTALL)
                 .matcher(Files.readString(README));
         assertTrue(blocks.find(), "README.md has no class HumFreeInput");
-        String example = blocks.group(1);
-        assertEquals(
-                0,
-                Arrays.stream(example.split("\n"))
-                        .filter(line -> line.length() > 100)
-                        .count());
-        return example;
+        return blocks.group(1);
     }
 }

@@ -1,6 +1,7 @@
 package io.github.polewright.live;
 
 import io.github.polewright.slab.Slab;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Runs all sections over a slab: keeps the states, chooses the loops, walks the coefficients. The audio thread's own.
@@ -16,6 +17,7 @@ final class Engine {
     private final Slab slab;
     private final double[] samples;
     private final Course course;
+    private final @Nullable Rows rows;
     private final double[] states;
     private double[] old;
     private double[] next;
@@ -29,6 +31,7 @@ final class Engine {
         this.slab = new Slab(channels);
         this.samples = slab.samples();
         this.course = new Course(initial, 5 * sections);
+        this.rows = channels < Rows.LEAST_CHANNELS ? null : new Rows(transposed, channels, sections);
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
         this.next = new double[old.length];
@@ -64,7 +67,9 @@ final class Engine {
     /** Filters what the slab holds, in place. */
     void run(int frames) {
         int untilGuard = Guard.framesUntil(clock);
-        if (course.gliding()) {
+        if (rows != null) {
+            runRows(rows, frames, untilGuard);
+        } else if (course.gliding()) {
             glide(frames, untilGuard);
         } else if (transposed) {
             runTransposed(frames, untilGuard);
@@ -80,6 +85,17 @@ final class Engine {
         clock += frames;
         if ((clock & (Slab.FRAMES - 1)) == 0) {
             contain();
+        }
+    }
+
+    private void runRows(Rows all, int frames, int untilGuard) {
+        double[] c = course.coefficients();
+        if (course.gliding()) {
+            all.glide(samples, frames, untilGuard, c, course.step(), course.passed(), old, next);
+        } else if (transposed) {
+            all.transposed(samples, frames, untilGuard, c, states, old, next);
+        } else {
+            all.direct(samples, frames, untilGuard, c, old, next);
         }
     }
 

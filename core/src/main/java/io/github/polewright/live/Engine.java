@@ -31,7 +31,7 @@ final class Engine {
         this.slab = new Slab(channels);
         this.samples = slab.samples();
         this.course = new Course(initial, 5 * sections);
-        this.rows = channels < Rows.LEAST_CHANNELS ? null : new Rows(transposed, channels, sections);
+        this.rows = Rows.pay(channels, sections) ? new Rows(transposed, channels, sections) : null;
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
         this.next = new double[old.length];

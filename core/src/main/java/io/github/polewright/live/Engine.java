@@ -4,6 +4,7 @@ import io.github.polewright.Cascade;
 import io.github.polewright.retune.Bucket;
 import io.github.polewright.retune.Walk;
 import io.github.polewright.slab.Slab;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Runs all sections over a slab: keeps the states, chooses the loops, walks the coefficients. The audio thread's own.
@@ -20,6 +21,7 @@ final class Engine {
     private final double[] samples;
     private final Walk walk;
     private final OutputGain gain;
+    private final @Nullable Rows rows;
     private final double[] states;
     private double[] old;
     private double[] next;
@@ -36,6 +38,7 @@ final class Engine {
         this.samples = slab.samples();
         this.walk = new Walk(start, Bucket.USUAL_LIMIT);
         this.gain = new OutputGain(gainFrames);
+        this.rows = Rows.pay(channels, sections) ? new Rows(transposed, channels, sections) : null;
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
         this.next = new double[old.length];
@@ -76,17 +79,19 @@ final class Engine {
     void run(int frames) {
         int untilGuard = Guard.framesUntil(clock);
         boolean steadyTransposed = transposed && walk.isSettled();
-        if (steadyTransposed) {
-            if (signalsLead) {
-                statesFromSignals();
-            }
+        if (steadyTransposed && signalsLead) {
+            statesFromSignals();
+        }
+        signalsLead = !steadyTransposed;
+        if (rows != null) {
+            runRows(rows, frames, untilGuard, steadyTransposed);
+        } else if (steadyTransposed) {
             runTransposed(frames, untilGuard);
         } else if (walk.isStandingStill()) {
             runDirect(frames, untilGuard);
         } else {
             glide(frames, untilGuard);
         }
-        signalsLead = !steadyTransposed;
         double[] swap = old;
         old = next;
         next = swap;
@@ -103,6 +108,17 @@ final class Engine {
             gain.apply(samples, channel * Slab.FRAMES, frames);
         }
         gain.advance(frames);
+    }
+
+    private void runRows(Rows all, int frames, int untilGuard, boolean steadyTransposed) {
+        double[] c = walk.bases();
+        if (steadyTransposed) {
+            all.transposed(samples, frames, untilGuard, c, states, old, next);
+        } else if (walk.isStandingStill()) {
+            all.direct(samples, frames, untilGuard, c, old, next);
+        } else {
+            all.glide(samples, frames, untilGuard, c, walk.steps(), walk.position(), old, next);
+        }
     }
 
     private void runDirect(int frames, int untilGuard) {

@@ -7,8 +7,6 @@ import io.github.polewright.retune.Pace;
 import io.github.polewright.slab.Ranges;
 import io.github.polewright.slab.Slab;
 import java.nio.FloatBuffer;
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Objects;
 import java.util.concurrent.atomic.AtomicLong;
 
@@ -33,11 +31,13 @@ public final class LiveCascade {
 
     private static final double GAIN_SECONDS = 0.05;
     private static final double MOST_GAIN_DB = 120;
+    private static final double MOST_WARM_UP_SECONDS = 600;
 
     private final double sampleRateHz;
     private final int channels;
     private final int mostSections;
     private final Pace pace;
+    private final Form form;
     private final Engine engine;
     private final Slab slab;
     private final Orders orders;
@@ -53,7 +53,8 @@ public final class LiveCascade {
         this.channels = channels;
         this.mostSections = mostSections;
         this.pace = pace;
-        Cascade slots = inSlots(cascade, mostSections);
+        this.form = form;
+        Cascade slots = Fit.inSlots(cascade, mostSections);
         this.orders = new Orders(slots);
         this.order = orders.latestAcquire();
         this.engine = new Engine(form, channels, slots, (int) Math.max(1, Math.round(GAIN_SECONDS * sampleRateHz)));
@@ -196,6 +197,28 @@ public final class LiveCascade {
     }
 
     /**
+     * Lets the JVM compile the loops before the stream starts: runs a twin of this cascade on scratch samples until the
+     * cost of a block no longer falls. This cascade's states, coefficients and counters stay as they are. Control
+     * thread; takes a core for as long as it lasts, typically a third of a second.
+     *
+     * @param mostSeconds when to stop in any case, above 0 to 600
+     * @return how the cost fell
+     * @throws IllegalArgumentException if {@code mostSeconds} is out of range
+     */
+    public WarmUp warmUp(double mostSeconds) {
+        if (!(mostSeconds > 0 && mostSeconds <= MOST_WARM_UP_SECONDS)) {
+            throw new IllegalArgumentException(
+                    "mostSeconds is " + mostSeconds + "; it must be above 0 and at most " + MOST_WARM_UP_SECONDS);
+        }
+        return new Warming(twin(), System::nanoTime).run(mostSeconds);
+    }
+
+    /** A silent one of the same shape that passes everything through. */
+    LiveCascade twin() {
+        return new LiveCascade(Cascade.of(sampleRateHz, Section.PASS_THROUGH), channels, form, mostSections, pace);
+    }
+
+    /**
      * Makes this cascade become another in the default glide: {@link Glide#sweeping} at the pace this was built with,
      * {@link Pace#SINGLE} unless said. Any thread, at any time; lock-free. The latest call wins, and the next block
      * begins it from wherever the coefficients are; sections that the target lacks pass through.
@@ -220,8 +243,8 @@ public final class LiveCascade {
      */
     public Glide retune(Cascade target, Pace chosen) {
         Objects.requireNonNull(chosen, "chosen");
-        checkRate(target);
-        checkFits(target, mostSections);
+        Fit.checkRate(target, sampleRateHz);
+        Fit.check(target, mostSections);
         return orders.retune(target, chosen);
     }
 
@@ -362,34 +385,5 @@ public final class LiveCascade {
         replacedInputs.setRelease(slab.replacedInputs());
         replacedOutputs.setRelease(slab.replacedOutputs());
         restarts.setRelease(engine.restarts());
-    }
-
-    private void checkRate(Cascade target) {
-        if (target.sampleRateHz() != sampleRateHz) {
-            throw new IllegalArgumentException(
-                    "target's sampleRateHz is " + target.sampleRateHz() + "; it must be " + sampleRateHz);
-        }
-    }
-
-    static void checkFits(Cascade cascade, int mostSections) {
-        Objects.requireNonNull(cascade, "cascade");
-        if (cascade.sectionCount() > mostSections) {
-            throw new IllegalArgumentException(
-                    "the cascade has " + cascade.sectionCount() + " sections; it must have 1 to " + mostSections);
-        }
-        for (int i = 0; i < cascade.sectionCount(); i++) {
-            if (!cascade.section(i).isStable()) {
-                throw new IllegalArgumentException("section " + i + " is " + cascade.section(i)
-                        + "; it must be stable (|a2| < 1 and |a1| < 1 + a2)");
-            }
-        }
-    }
-
-    private static Cascade inSlots(Cascade cascade, int slots) {
-        List<Section> sections = new ArrayList<>(cascade.sections());
-        while (sections.size() < slots) {
-            sections.add(Section.PASS_THROUGH);
-        }
-        return Cascade.of(cascade.sampleRateHz(), sections);
     }
 }

@@ -76,7 +76,7 @@ public final class LiveCascadeBuilder {
      * @throws IllegalArgumentException if the cascade is unstable
      */
     public LiveCascade build() {
-        LiveCascade.checkFits(cascade, mostSections);
+        Fit.check(cascade, mostSections);
         Rehearsal.held();
         return new LiveCascade(cascade, channels, form, mostSections, pace);
     }

@@ -23,6 +23,10 @@ final class Engine {
     private final OutputGain gain;
     private final @Nullable Rows rows;
     private final double[] states;
+    /** One section's coefficients, frame by frame, while they glide. */
+    private final double[][] moving = new double[5][Slab.FRAMES];
+
+    private final double[] ticks = new double[Slab.FRAMES];
     private double[] old;
     private double[] next;
     private boolean signalsLead;
@@ -144,7 +148,15 @@ final class Engine {
 
     private void runTransposed(int frames, int untilGuard) {
         double[] c = walk.bases();
-        for (int channel = 0; channel < channels; channel++) {
+        int channel = 0;
+        for (; channel + 2 <= channels; channel += 2) {
+            int from = channel * Slab.FRAMES;
+            for (int section = 0; section < sections; section++) {
+                RawTransposed.stereo(
+                        samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
+            }
+        }
+        if (channel < channels) {
             int from = channel * Slab.FRAMES;
             int section = 0;
             for (; section + 2 <= sections; section += 2) {
@@ -160,37 +172,23 @@ final class Engine {
         double[] c = walk.bases();
         double[] step = walk.steps();
         int passed = walk.position();
-        for (int section = 0; section < sections; section++) {
-            int channel = 0;
-            for (; channel + 2 <= channels; channel += 2) {
-                RawGlide.stereo(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        int last = channels - 1;
+        if (channels > 1) {
+            for (int i = 0; i < frames; i++) {
+                ticks[i] = passed + 1 + i;
             }
-            if (channel < channels) {
-                RawGlide.one(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        }
+        for (int section = 0; section < sections; section++) {
+            if (channels > 1) {
+                RawGlide.coefficients(moving, ticks, frames, c, step, section);
+            }
+            for (int channel = 0; channel < last; channel += 2) {
+                int from = channel * Slab.FRAMES;
+                RawGlide.stereo(samples, from, frames, untilGuard, moving, section, old, next, channels, channel);
+            }
+            if ((channels & 1) != 0) {
+                int from = last * Slab.FRAMES;
+                RawGlide.one(samples, from, frames, untilGuard, c, step, passed, section, old, next, channels, last);
             }
         }
     }

@@ -10,6 +10,10 @@ import io.github.polewright.retune.Glide;
 import io.github.polewright.retune.Pace;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Locale;
+import java.util.function.BiFunction;
+import org.junit.jupiter.api.Tag;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.junit.jupiter.params.provider.MethodSource;
@@ -23,7 +27,7 @@ class AudibilityTest {
 
     private static final double RATE_HZ = 48_000;
     private static final double TABLE_SLACK_DB = 3;
-    private static final double[] TONES_HZ = {440, 700, 1000, 2000, 4000, 8000};
+    private static final double[] TONES_HZ = {500, 700, 1000, 2000, 4000, 8000};
 
     /** One row: the limits are for 50 ms and 100 ms, or twice the certified length where that is longer. */
     record Row(String name, Section before, Section after, double after50Db, double after100Db, int settleFrames) {
@@ -91,11 +95,20 @@ class AudibilityTest {
     }
 
     private static double worstHardDb(Row row) {
+        return worstSwapDb(row, (at, in) -> NaiveSwap.hard(row.before, row.after, at, in));
+    }
+
+    /** Within 50 ms, in straight lines. */
+    private static double worstNaiveDb(Row row) {
+        return worstSwapDb(row, (at, in) -> NaiveSwap.transposedByBlocks(row.before, row.after, at, 2400, 64, in));
+    }
+
+    private static double worstSwapDb(Row row, BiFunction<Integer, double[], double[]> swap) {
         double worst = Double.NEGATIVE_INFINITY;
         for (double hz : TONES_HZ) {
             int at = Math.max(row.settleFrames, Clicks.WINDOW / 2);
-            double[] in = tone(hz, at + Clicks.WINDOW);
-            worst = Math.max(worst, Clicks.besideDb(NaiveSwap.hard(row.before, row.after, at, in), at, hz, RATE_HZ));
+            double[] out = swap.apply(at, tone(hz, at + Clicks.WINDOW));
+            worst = Math.max(worst, Clicks.besideDb(out, at, hz, RATE_HZ));
         }
         return worst;
     }
@@ -109,12 +122,38 @@ class AudibilityTest {
 
     @ParameterizedTest
     @MethodSource("rows")
-    void glideOfATenthOfASecondIsAsQuietAsTheTableAndFarBelowTheHardSwap(Row row) {
+    void glideOfATenthOfASecondIsAsQuietAsTheTable(Row row) {
         double found = worstDb(row, Pace.SINGLE.atLeastSeconds(0.1), Form.TRANSPOSED_DIRECT_FORM_2);
         assertTrue(found <= row.after100Db + TABLE_SLACK_DB, found + " dB");
+    }
+
+    /** Sweeps over more than four octaves need 200 ms for that, all others 100 ms. */
+    @ParameterizedTest
+    @MethodSource("rows")
+    void isFortyDecibelsBelowTheHardSwapWhereThatClicks(Row row) {
         double hard = worstHardDb(row);
         if (hard > -60) {
+            boolean isWide = row.name.contains("5000");
+            double found = worstDb(row, Pace.SINGLE.atLeastSeconds(isWide ? 0.2 : 0.1), Form.DIRECT_FORM_1);
             assertTrue(found <= hard - 40, found + " dB, hard " + hard + " dB");
+        }
+    }
+
+    /** Prints the figures for the documentation. */
+    @Test
+    @Tag("slow")
+    void table() {
+        System.out.println("case: hard swap / transposed swap a block / default / 100 ms / 200 ms, dB");
+        for (Row row : rows()) {
+            System.out.printf(
+                    Locale.ROOT,
+                    "%s: %.0f / %.0f / %.0f / %.0f / %.0f%n",
+                    row,
+                    worstHardDb(row),
+                    worstNaiveDb(row),
+                    worstDb(row, Pace.SINGLE, Form.DIRECT_FORM_1),
+                    worstDb(row, Pace.SINGLE.atLeastSeconds(0.1), Form.DIRECT_FORM_1),
+                    worstDb(row, Pace.SINGLE.atLeastSeconds(0.2), Form.DIRECT_FORM_1));
         }
     }
 
@@ -128,18 +167,18 @@ class AudibilityTest {
             if (row.name.startsWith("low shelf")) {
                 continue; // its gain at 0 Hz is what changes
             }
-            double[] in = new double[row.settleFrames + 20_000];
+            assertEquals(1, gain, 1e-9);
+            int at = 2 * row.settleFrames;
+            double[] in = new double[at + 20_000];
             Arrays.fill(in, 1);
             double[] out = new double[in.length];
             LiveCascade live =
                     LiveCascade.builder(cascade(row.before)).form(form).build();
-            live.process(in, 0, out, 0, row.settleFrames);
+            live.process(in, 0, out, 0, at);
             live.retune(cascade(row.after));
-            live.process(in, row.settleFrames, out, row.settleFrames, 20_000);
-            assertEquals(1, gain, 1e-9);
-            double settled = out[row.settleFrames - 1];
-            for (int n = row.settleFrames; n < out.length; n++) {
-                assertEquals(settled, out[n], 1e-9, row + ", frame " + n);
+            live.process(in, at, out, at, 20_000);
+            for (int n = at; n < out.length; n++) {
+                assertEquals(1, out[n], 1e-9, row + ", frame " + n);
             }
         }
         double[] in = new double[20_000];

@@ -8,6 +8,7 @@ module io.github.polewright {
     exports io.github.polewright;
     exports io.github.polewright.pcm;
     exports io.github.polewright.design;
-    exports io.github.polewright.live;
     exports io.github.polewright.inspect;
+    exports io.github.polewright.live;
+    exports io.github.polewright.retune;
 }

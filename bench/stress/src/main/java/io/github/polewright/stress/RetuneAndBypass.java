@@ -8,7 +8,7 @@ import org.openjdk.jcstress.annotations.Outcome;
 import org.openjdk.jcstress.annotations.State;
 import org.openjdk.jcstress.infra.results.II_Result;
 
-/** One thread retunes, one bypasses, blocks meanwhile: neither may be lost, whichever came first. */
+/** One thread retunes, one bypasses: neither may be lost, whichever came first. */
 @JCStressTest
 @Outcome(id = "1, 27", expect = Expect.ACCEPTABLE, desc = "dry, and the new target when the sections are back")
 @Outcome(expect = Expect.FORBIDDEN, desc = "the bypass or the retune lost")
@@ -27,14 +27,7 @@ public class RetuneAndBypass extends Gains {
         bypass(true);
     }
 
-    /** Audio thread. */
-    @Actor
-    public void audio() {
-        block();
-        block();
-    }
-
-    /** When all are done. */
+    /** Audio thread, when both are done. */
     @Arbiter
     public void end(II_Result result) {
         result.r1 = settled();

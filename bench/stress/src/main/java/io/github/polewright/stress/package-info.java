@@ -3,7 +3,8 @@
  * three equal gains that jump in one frame, so that one output sample tells which coefficients made it: the cube of a
  * gain, or, were a set ever torn, some other product.
  *
- * <p>{@code java -jar bench/stress/target/polewright-stress.jar -m quick} takes about a minute.
+ * <p>Two actors each, so that they run where there are two processors. A minute:
+ * {@code java -jar bench/stress/target/polewright-stress.jar -m quick -sc false -af NONE -f 1}.
  */
 @NullMarked
 package io.github.polewright.stress;

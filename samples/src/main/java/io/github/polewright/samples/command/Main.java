@@ -14,7 +14,7 @@ import picocli.CommandLine.Command;
         mixinStandardHelpOptions = true,
         versionProvider = Main.Version.class,
         synopsisSubcommandLabel = "COMMAND",
-        subcommands = {SurveyCommand.class, CleanCommand.class, DemoCommand.class},
+        subcommands = {SurveyCommand.class, CleanCommand.class, DemoCommand.class, RetuneCommand.class},
         footer = {"", "Exit status: 0 done, 1 failed, 2 wrong usage."})
 public final class Main implements Runnable {
 
@@ -64,6 +64,7 @@ public final class Main implements Runnable {
 
     @Override
     public void run() {
-        throw new CommandLine.ParameterException(new CommandLine(this), "a command is missing: survey, clean or demo");
+        throw new CommandLine.ParameterException(
+                new CommandLine(this), "a command is missing: survey, clean, demo or retune");
     }
 }

@@ -6,5 +6,6 @@ module io.github.polewright {
     requires static org.jspecify;
 
     exports io.github.polewright;
+    exports io.github.polewright.live;
     exports io.github.polewright.tone;
 }

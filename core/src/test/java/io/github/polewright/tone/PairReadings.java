@@ -99,6 +99,15 @@ final class PairReadings {
         return result;
     }
 
+    void add(PairReadings other) {
+        right += other.right;
+        wrong += other.wrong;
+        missed += other.missed;
+        worstStartMs = Math.max(worstStartMs, other.worstStartMs);
+        worstEndMs = Math.max(worstEndMs, other.worstEndMs);
+        worstDecisionMs = Math.max(worstDecisionMs, other.worstDecisionMs);
+    }
+
     @Override
     public String toString() {
         return String.format(

@@ -54,8 +54,8 @@ final class PairHop {
             turnImaginary[k] = -Math.sin(advance);
             tolerance[k] = Math.tan(2 * Math.PI * hopSeconds * limits.hopToleranceHz(frequenciesHz[k]));
         }
-        leastTwist = limits.leastTwist();
-        greatestTwist = limits.greatestTwist();
+        leastTwist = limits.leastHopTwist();
+        greatestTwist = limits.greatestHopTwist();
         floor = limits.floorPower();
     }
 

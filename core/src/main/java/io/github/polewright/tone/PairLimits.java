@@ -35,7 +35,8 @@ public final class PairLimits {
     /** Column Brazilian: error 1.8 %, twist ±9 dB, operates at −25 dBm and not below −50 dBm. */
     public static final PairLimits BRAZILIAN = new PairLimits(1.8, 0, -9, 9, -37.5 + DBFS_OF_0_DBM0, 0.020);
 
-    private static final double TWIST_MARGIN_DB = 2;
+    private static final double MEAN_TWIST_MARGIN_DB = 2;
+    private static final double HOP_TWIST_MARGIN_DB = 3;
 
     private final double errorPercent;
     private final double errorHz;
@@ -183,12 +184,20 @@ public final class PairLimits {
         return (errorPercent + 0.7) / 100 * frequencyHz + errorHz;
     }
 
-    double leastTwist() {
-        return Math.pow(10, (lowestTwistDb - TWIST_MARGIN_DB) / 10);
+    double leastHopTwist() {
+        return Math.pow(10, (lowestTwistDb - HOP_TWIST_MARGIN_DB) / 10);
     }
 
-    double greatestTwist() {
-        return Math.pow(10, (highestTwistDb + TWIST_MARGIN_DB) / 10);
+    double greatestHopTwist() {
+        return Math.pow(10, (highestTwistDb + HOP_TWIST_MARGIN_DB) / 10);
+    }
+
+    double leastMeanTwist() {
+        return Math.pow(10, (lowestTwistDb - MEAN_TWIST_MARGIN_DB) / 10);
+    }
+
+    double greatestMeanTwist() {
+        return Math.pow(10, (highestTwistDb + MEAN_TWIST_MARGIN_DB) / 10);
     }
 
     double floorPower() {

@@ -25,7 +25,8 @@ final class PairSums {
         powers = 0;
     }
 
-    void copy(PairSums other) {
+    /** Another's symbol and mean deviation, with no power yet. */
+    void copyAdvance(PairSums other) {
         clear(other.low, other.high);
         lowReal = other.lowReal;
         lowImaginary = other.lowImaginary;
@@ -37,7 +38,8 @@ final class PairSums {
         return low == other.low && high == other.high;
     }
 
-    void addAdvance(PairHop hop) {
+    void add(PairHop hop) {
+        addPower(hop);
         lowReal += hop.advanceReal(low);
         lowImaginary += hop.advanceImaginary(low);
         highReal += hop.advanceReal(high);
@@ -51,8 +53,13 @@ final class PairSums {
     }
 
     /** Whether the mean deviation of both tones lies within the tangents of their tolerances. */
-    boolean isWithin(double lowTolerance, double highTolerance) {
+    boolean isNear(double lowTolerance, double highTolerance) {
         return Math.abs(lowImaginary) <= lowTolerance * lowReal && Math.abs(highImaginary) <= highTolerance * highReal;
+    }
+
+    /** Whether the mean power of the high tone over that of the low one lies within the two ratios. */
+    boolean isBalanced(double least, double greatest) {
+        return highPower >= least * lowPower && highPower <= greatest * lowPower;
     }
 
     double meanLowPower() {

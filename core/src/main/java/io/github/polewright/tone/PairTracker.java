@@ -17,6 +17,9 @@ final class PairTracker {
     /** Greatest ratio of a tone's powers within a run, about 4 dB. */
     private static final double STEADY = 2.5;
 
+    /** The first good hop of a run sees a window that is still filling: it says nothing about steadiness. */
+    private static final int FILLING_HOPS = 1;
+
     /** Only a dip below this share of the run's peak energy may be bridged: sound that goes on is no interruption. */
     private static final double DIP = 0.9;
 
@@ -24,6 +27,8 @@ final class PairTracker {
     private static final double FULL = 0.7;
 
     private final double[] tolerance = new double[PairSpectrum.TONES];
+    private final double leastTwist;
+    private final double greatestTwist;
     private final int releaseHops;
     private final PairSink sink;
 
@@ -51,6 +56,8 @@ final class PairTracker {
         for (int k = 0; k < PairSpectrum.TONES; k++) {
             tolerance[k] = Math.tan(2 * Math.PI * hopSeconds * limits.meanToleranceHz(frequenciesHz[k]));
         }
+        leastTwist = limits.leastMeanTwist();
+        greatestTwist = limits.greatestMeanTwist();
         releaseHops = Math.max(1, (int) Math.round(limits.releaseSeconds() / hopSeconds));
         this.sink = sink;
     }
@@ -73,7 +80,7 @@ final class PairTracker {
             absent = 0;
             start = runStart;
             reference = hop.tonePower(run.low) + hop.tonePower(run.high);
-            symbol.copy(run);
+            symbol.copyAdvance(run);
             symbol.addPower(hop);
             sink.began(symbol, start, index);
         }
@@ -93,14 +100,22 @@ final class PairTracker {
             begin(hop, index);
         }
         runMisses = 0;
+        if (runCount > FILLING_HOPS) {
+            widen(hop);
+        }
+        run.add(hop);
+        return runCount >= QUALIFYING_HOPS
+                && run.isNear(tolerance[run.low], tolerance[run.high])
+                && run.isBalanced(leastTwist, greatestTwist);
+    }
+
+    private void widen(PairHop hop) {
         double lowPower = hop.tonePower(hop.low);
         double highPower = hop.tonePower(hop.high);
         lowLeast = Math.min(lowLeast, lowPower);
         lowGreatest = Math.max(lowGreatest, lowPower);
         highLeast = Math.min(highLeast, highPower);
         highGreatest = Math.max(highGreatest, highPower);
-        run.addAdvance(hop);
-        return runCount >= QUALIFYING_HOPS && run.isWithin(tolerance[run.low], tolerance[run.high]);
     }
 
     private boolean isSteady(PairHop hop) {

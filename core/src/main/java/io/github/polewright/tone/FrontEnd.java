@@ -1,6 +1,8 @@
 package io.github.polewright.tone;
 
 import io.github.polewright.Section;
+import io.github.polewright.design.Cookbook;
+import io.github.polewright.design.DcNotch;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -33,29 +35,14 @@ final class FrontEnd {
      */
     static FrontEnd of(double sampleRateHz, int factor, double lowPassHz, List<Section> notches) {
         List<Section> sections = new ArrayList<>(notches);
-        double pole = Math.exp(-2 * Math.PI * DC_CORNER_HZ / sampleRateHz);
-        double gain = (1 + pole) / 2;
-        sections.add(Section.of(gain, -gain, 0, -pole, 0));
+        sections.add(DcNotch.byCorner(sampleRateHz, DC_CORNER_HZ));
         if (lowPassHz < sampleRateHz / 2) {
             for (int i = 0; i < 3; i++) {
-                sections.add(lowPass(sampleRateHz, lowPassHz, 0.5 / Math.sin((2 * i + 1) * Math.PI / 12)));
+                double q = 0.5 / Math.sin((2 * i + 1) * Math.PI / 12);
+                sections.add(Cookbook.lowPass(sampleRateHz, lowPassHz, q));
             }
         }
         return new FrontEnd(sampleRateHz, factor, sections);
-    }
-
-    /** Bilinear transform of the analogue second-order low-pass, corner pre-warped. */
-    private static Section lowPass(double sampleRateHz, double cornerHz, double q) {
-        double k = Math.tan(Math.PI * cornerHz / sampleRateHz);
-        double k2 = k * k;
-        return Section.normalized(k2, 2 * k2, k2, 1 + k / q + k2, 2 * (k2 - 1), 1 - k / q + k2);
-    }
-
-    /** Half the sum of the input and a second-order all-pass: exact zero at the centre, width between the -3 dB points. */
-    static Section notch(double sampleRateHz, double centreHz, double widthHz) {
-        double k = Math.tan(Math.PI * widthHz / sampleRateHz);
-        double turn = -2 * Math.cos(2 * Math.PI * centreHz / sampleRateHz);
-        return Section.normalized(1, turn, 1, 1 + k, turn, 1 - k);
     }
 
     int factor() {

@@ -1,5 +1,6 @@
 package io.github.polewright.tone;
 
+import io.github.polewright.slab.Ranges;
 import java.util.concurrent.atomic.AtomicLong;
 
 /**
@@ -46,7 +47,7 @@ final class Intake {
     }
 
     void interleaved(float[] source, int offset, int frames) {
-        checkRange(source.length, offset, frames, channels);
+        Ranges.interleaved("source", source.length, offset, frames, channels);
         int next = offset + channel;
         for (int left = frames; left > 0; ) {
             int count = room(left);
@@ -59,7 +60,7 @@ final class Intake {
     }
 
     void interleaved(double[] source, int offset, int frames) {
-        checkRange(source.length, offset, frames, channels);
+        Ranges.interleaved("source", source.length, offset, frames, channels);
         int next = offset + channel;
         for (int left = frames; left > 0; ) {
             int count = room(left);
@@ -76,7 +77,7 @@ final class Intake {
             throw new IllegalArgumentException("source has " + source.length + " channels; it must have " + channels);
         }
         float[] row = source[channel];
-        checkRange(row.length, offset, frames, 1);
+        Ranges.interleaved("source[channel]", row.length, offset, frames, 1);
         int next = offset;
         for (int left = frames; left > 0; ) {
             int count = room(left);
@@ -85,17 +86,6 @@ final class Intake {
             }
             pass(count);
             left -= count;
-        }
-    }
-
-    private static void checkRange(int length, int offset, int frames, int samplesPerFrame) {
-        if (frames < 0) {
-            throw new IndexOutOfBoundsException("frames is " + frames + "; it must be at least 0");
-        }
-        long end = offset + (long) frames * samplesPerFrame;
-        if (offset < 0 || end > length) {
-            throw new IndexOutOfBoundsException("samples " + offset + " to " + end
-                    + " asked for; they must lie in 0 to " + length + ", the length of the source");
         }
     }
 

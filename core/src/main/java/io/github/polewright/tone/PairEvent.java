@@ -134,7 +134,7 @@ public final class PairEvent {
     }
 
     /**
-     * How far the low tone was from its nominal frequency, on average until it was read.
+     * How far the low tone was from its nominal frequency, on average until it was read, within 2 Hz in a clean signal.
      *
      * @return hertz, positive if too high
      */
@@ -143,7 +143,7 @@ public final class PairEvent {
     }
 
     /**
-     * How far the high tone was from its nominal frequency, on average until it was read.
+     * How far the high tone was from its nominal frequency, on average until it was read, within 2 Hz in a clean signal.
      *
      * @return hertz, positive if too high
      */

@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import io.github.polewright.Section;
+import io.github.polewright.design.HumNotch;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -89,6 +90,7 @@ public final class PairReader {
      * @param source samples, any values
      * @param offset index of the first frame's first sample
      * @param frames how many frames
+     * @throws IllegalArgumentException if {@code frames < 0}
      * @throws IndexOutOfBoundsException if the frames do not lie in {@code source}
      */
     public void process(float[] source, int offset, int frames) {
@@ -101,6 +103,7 @@ public final class PairReader {
      * @param source samples, any values
      * @param offset index of the first frame's first sample
      * @param frames how many frames
+     * @throws IllegalArgumentException if {@code frames < 0}
      * @throws IndexOutOfBoundsException if the frames do not lie in {@code source}
      */
     public void process(double[] source, int offset, int frames) {
@@ -113,7 +116,7 @@ public final class PairReader {
      * @param source one array of samples for each channel; only the chosen one is read
      * @param offset index of the first frame
      * @param frames how many frames
-     * @throws IllegalArgumentException if {@code source} hasn't one array for each channel
+     * @throws IllegalArgumentException if {@code frames < 0} or {@code source} hasn't one array for each channel
      * @throws IndexOutOfBoundsException if the frames do not lie in the chosen array
      */
     public void process(float[][] source, int offset, int frames) {
@@ -302,7 +305,7 @@ public final class PairReader {
             }
             notches.clear();
             for (double one : hertz) {
-                notches.add(FrontEnd.notch(sampleRateHz, one, NOTCH_WIDTH_HZ));
+                notches.add(HumNotch.byWidth(sampleRateHz, one, NOTCH_WIDTH_HZ));
             }
             return this;
         }

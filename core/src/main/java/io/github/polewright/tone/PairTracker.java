@@ -143,17 +143,10 @@ final class PairTracker {
         for (int ago = 1; ago <= LOOK_BACK_HOPS; ago++) {
             double before = hop.pairPower(hop.low, hop.high, ago);
             if (before < threshold) {
-                return index - ago + crossing(before, hop.pairPower(hop.low, hop.high, ago - 1), threshold);
+                return index - ago + Crossing.between(before, hop.pairPower(hop.low, hop.high, ago - 1), threshold);
             }
         }
         return index - LOOK_BACK_HOPS;
-    }
-
-    /** Where between two hops the amplitude crosses, 0 to 1, from powers. */
-    private static double crossing(double before, double after, double threshold) {
-        double from = Math.sqrt(before);
-        double step = Math.sqrt(after) - from;
-        return step == 0 ? 1 : Math.max(0, Math.min(1, (Math.sqrt(threshold) - from) / step));
     }
 
     private void follow(PairHop hop, long index) {
@@ -175,7 +168,7 @@ final class PairTracker {
         }
         if (absent++ == 0) {
             double before = hop.pairPower(symbol.low, symbol.high, 1);
-            end = index - 1 + crossing(before, both, reference / 4);
+            end = index - 1 + Crossing.between(before, both, reference / 4);
         }
         if (absent >= releaseHops) {
             sink.ended(symbol, start, end, index);

@@ -1,5 +1,7 @@
 /**
- * Named tones: {@link io.github.polewright.tone.PairReader tone pairs} after ITU-T Q.23 and Q.24.
+ * Named tones: {@link io.github.polewright.tone.ToneMeter their levels}, {@link
+ * io.github.polewright.tone.CadenceReader their cadence}, and {@link io.github.polewright.tone.PairReader tone pairs}
+ * after ITU-T Q.23 and Q.24.
  *
  * <p>One thread, the audio thread, feeds frames; another may drain the events, through a ring of fixed size. Nothing here
  * allocates, locks or waits while it is fed.

@@ -6,8 +6,9 @@ module io.github.polewright {
     requires static org.jspecify;
 
     exports io.github.polewright;
+    exports io.github.polewright.pcm;
     exports io.github.polewright.design;
-    exports io.github.polewright.inspect;
     exports io.github.polewright.live;
+    exports io.github.polewright.inspect;
     exports io.github.polewright.tone;
 }

@@ -6,7 +6,8 @@ import io.github.polewright.Section;
  * The nine shapes of the W3C Working Group Note "Audio EQ Cookbook" (8 June 2021, after R. Bristow-Johnson): bilinear
  * transforms of second-order analogue prototypes.
  *
- * <p>With {@code w0 = 2 pi f0 / sampleRateHz}, {@code alpha = sin w0 / (2 q)} and {@code A = 10^(gainDb / 40)} as in the
+ * <p>With {@code w0 = 2 pi f0 / sampleRateHz}, {@code alpha = sin w0 / (2 q)} and {@code A = 10^(gainDb / 40)} as in
+ * the
  * note. {@code 1 - cos w0} and {@code 1 + cos w0} are taken as {@code 2 sin^2(w0/2)} and {@code 2 cos^2(w0/2)}, so low
  * corners lose no digits. A bandwidth in octaves or a shelf slope becomes a quality factor by {@link #qOfOctaves} or
  * {@link #qOfSlope}.
@@ -111,8 +112,8 @@ public final class Cookbook {
     }
 
     /**
-     * Peaking: gain 1 at DC and at Nyquist, {@code gainDb} at the centre. The same gain with the opposite sign undoes it
-     * exactly.
+     * Peaking: gain 1 at DC and at Nyquist, {@code gainDb} at the centre. The same gain with the opposite sign
+     * undoes it exactly.
      *
      * @param sampleRateHz the sample rate in hertz
      * @param centreHz the centre in hertz, above 0 and below half the sample rate
@@ -191,7 +192,8 @@ public final class Cookbook {
 
     /**
      * The quality factor of a bandwidth in octaves: {@code 1/Q = 2 sinh(ln 2 / 2 * octaves * w0 / sin w0)}, the note's
-     * digital form. The bandwidth lies between the -3 dB edges of a band-pass or notch, or between the edges at half the
+     * digital form. The bandwidth lies between the -3 dB edges of a band-pass or notch, or between the edges at half
+     * the
      * decibels of a peaking shape. After the bilinear transform it is close, not exact: 1 octave about 3 kHz at 48 kHz
      * measures 0.998.
      *
@@ -216,8 +218,8 @@ public final class Cookbook {
     }
 
     /**
-     * The quality factor of a shelf slope: {@code 1/Q = sqrt((A + 1/A) (1/slope - 1) + 2)}. A slope of 1 is the steepest
-     * that stays monotonic.
+     * The quality factor of a shelf slope: {@code 1/Q = sqrt((A + 1/A) (1/slope - 1) + 2)}. A slope of 1 is the
+     * steepest that stays monotonic.
      *
      * @param slope the note's {@code S}, above 0 and below {@code (A^2 + 1) / (A - 1)^2}
      * @param gainDb the gain of the shelf in decibels

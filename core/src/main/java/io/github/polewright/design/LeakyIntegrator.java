@@ -18,7 +18,8 @@ public final class LeakyIntegrator {
     /**
      * By the corner: the gain is the square root of 1/2 (-3.0103 dB) at exactly {@code cornerHz}.
      *
-     * <p>Solves {@code (1 - lambda)^2 / (1 - 2 lambda cos w + lambda^2) = 1/2} for the pole inside the unit circle: with
+     * <p>Solves {@code (1 - lambda)^2 / (1 - 2 lambda cos w + lambda^2) = 1/2} for the pole inside the unit circle:
+     * with
      * {@code k = 1 - cos w = 2 sin^2(w/2)}, {@code 1 - lambda = 2k / (k + sqrt(k (k + 2)))} (derived for this project).
      * A solution exists for every corner below Nyquist; the common {@code lambda = exp(-w)} misses the corner the more
      * the higher it is.

@@ -8,8 +8,8 @@ import io.github.polewright.Section;
  * state space: the sum over n of {@code (A^T)^n C^T C A^n}, doubled in length each step until it stands.
  *
  * <p>Each section is realized as {@code A = [[s, g], [d / g, s]], C = [1, 0]} with {@code s = -a1 / 2} and
- * {@code d = a1^2 / 4 - a2}: eigenvalues {@code s +- sqrt d}, and with {@code g = sqrt |d|} a normal matrix, so squaring
- * it does not amplify rounding the way a companion matrix would near {@code z = 1}.
+ * {@code d = a1^2 / 4 - a2}: eigenvalues {@code s +- sqrt d}, and with {@code g = sqrt |d|} a normal matrix, so
+ * squaring it does not amplify rounding the way a companion matrix would near {@code z = 1}.
  */
 final class NoiseGain {
 

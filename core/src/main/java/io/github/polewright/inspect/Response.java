@@ -205,8 +205,8 @@ public final class Response {
     }
 
     /**
-     * How long the slowest pole takes to fall by 60 dB, {@code ln(1000) / (-ln |p| * sampleRateHz)}. The envelope of one
-     * pole pair: a pole that a zero covers counts as well, and several equally slow poles together take longer.
+     * How long the slowest pole takes to fall by 60 dB, {@code ln(1000) / (-ln |p| * sampleRateHz)}. The envelope of
+     * one pole pair: a pole that a zero covers counts as well, and several equally slow poles together take longer.
      *
      * @return seconds; 0 without poles off the origin, infinite if the cascade is not stable
      */

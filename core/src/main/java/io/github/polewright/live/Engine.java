@@ -16,7 +16,6 @@ final class Engine {
     private final Slab slab;
     private final double[] samples;
     private final Course course;
-    private final double[] ramp = new double[5 * Slab.FRAMES];
     private final double[] states;
     private double[] old;
     private double[] next;
@@ -86,7 +85,14 @@ final class Engine {
 
     private void runDirect(int frames, int untilGuard) {
         double[] c = course.coefficients();
-        for (int channel = 0; channel < channels; channel++) {
+        int channel = 0;
+        for (; channel + 2 <= channels; channel += 2) {
+            int from = channel * Slab.FRAMES;
+            for (int section = 0; section < sections; section++) {
+                RawDirectForm1.stereo(samples, from, frames, untilGuard, c, section, old, next, channels, channel);
+            }
+        }
+        if (channel < channels) {
             int from = channel * Slab.FRAMES;
             int section = 0;
             for (; section + 2 <= sections; section += 2) {
@@ -103,26 +109,55 @@ final class Engine {
         for (int channel = 0; channel < channels; channel++) {
             int from = channel * Slab.FRAMES;
             int section = 0;
-            for (; section + 4 <= sections; section += 4) {
-                RawTransposed.quad(samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
+            for (; section + 2 <= sections; section += 2) {
+                RawTransposed.pair(samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
             }
-            for (; section < sections; section++) {
+            if (section < sections) {
                 RawTransposed.one(samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
             }
         }
     }
 
     private void glide(int frames, int untilGuard) {
+        double[] c = course.coefficients();
+        double[] step = course.step();
+        int passed = course.passed();
         for (int section = 0; section < sections; section++) {
-            RawGlide.layOut(ramp, course.coefficients(), course.step(), section, course.passed(), frames);
-            for (int channel = 0; channel < channels; channel++) {
-                int from = channel * Slab.FRAMES;
-                RawGlide.one(samples, from, frames, untilGuard, ramp, section, old, next, channels, channel);
+            int channel = 0;
+            for (; channel + 2 <= channels; channel += 2) {
+                RawGlide.stereo(
+                        samples,
+                        channel * Slab.FRAMES,
+                        frames,
+                        untilGuard,
+                        c,
+                        step,
+                        passed,
+                        section,
+                        old,
+                        next,
+                        channels,
+                        channel);
+            }
+            if (channel < channels) {
+                RawGlide.one(
+                        samples,
+                        channel * Slab.FRAMES,
+                        frames,
+                        untilGuard,
+                        c,
+                        step,
+                        passed,
+                        section,
+                        old,
+                        next,
+                        channels,
+                        channel);
             }
         }
     }
 
-    /** The states of transposed direct form II that belong to the signals' last two samples; exact, no division. */
+    /** The states of transposed direct form II that belong to the signals' last two samples; no division. */
     private void statesFromSignals() {
         double[] c = course.coefficients();
         for (int section = 0; section < sections; section++) {
@@ -132,7 +167,7 @@ final class Engine {
                 double x1 = old[h], x2 = old[h + channels];
                 double y1 = old[h + 2 * channels], y2 = old[h + 3 * channels];
                 states[h] = c[k + 1] * x1 - c[k + 3] * y1 + (c[k + 2] * x2 - c[k + 4] * y2);
-                states[h + channels] = c[k + 2] * x1 - c[k + 4] * y1;
+                states[h + channels] = y1 - c[k] * x1;
             }
         }
     }

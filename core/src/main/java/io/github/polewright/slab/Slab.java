@@ -71,6 +71,13 @@ public final class Slab {
      * @param frames at most {@link #FRAMES}
      */
     public void load(float[] source, int offset, int frames) {
+        if (channels == 1) {
+            double[] to = samples;
+            for (int i = 0; i < frames; i++) {
+                to[i] = contained(source[offset + i]);
+            }
+            return;
+        }
         for (int channel = 0; channel < channels; channel++) {
             int from = offset + channel;
             int to = channel * FRAMES;
@@ -88,6 +95,13 @@ public final class Slab {
      * @param frames at most {@link #FRAMES}
      */
     public void load(double[] source, int offset, int frames) {
+        if (channels == 1) {
+            double[] to = samples;
+            for (int i = 0; i < frames; i++) {
+                to[i] = contained(source[offset + i]);
+            }
+            return;
+        }
         for (int channel = 0; channel < channels; channel++) {
             int from = offset + channel;
             int to = channel * FRAMES;
@@ -139,6 +153,13 @@ public final class Slab {
      * @param frames as many as were loaded
      */
     public void store(float[] destination, int offset, int frames) {
+        if (channels == 1) {
+            double[] from = samples;
+            for (int i = 0; i < frames; i++) {
+                destination[offset + i] = narrowed(from[i]);
+            }
+            return;
+        }
         for (int channel = 0; channel < channels; channel++) {
             int to = offset + channel;
             int from = channel * FRAMES;
@@ -156,16 +177,18 @@ public final class Slab {
      * @param frames as many as were loaded
      */
     public void store(double[] destination, int offset, int frames) {
+        if (channels == 1) {
+            double[] from = samples;
+            for (int i = 0; i < frames; i++) {
+                destination[offset + i] = finite(from[i]);
+            }
+            return;
+        }
         for (int channel = 0; channel < channels; channel++) {
             int to = offset + channel;
             int from = channel * FRAMES;
             for (int end = from + frames; from < end; from++, to += channels) {
-                double sample = samples[from];
-                if (!(Math.abs(sample) <= Double.MAX_VALUE)) {
-                    sample = 0;
-                    replacedOutputs++;
-                }
-                destination[to] = sample;
+                destination[to] = finite(samples[from]);
             }
         }
     }
@@ -227,6 +250,14 @@ public final class Slab {
         float narrow = (float) sample;
         if (Math.abs(narrow) <= Float.MAX_VALUE) {
             return narrow;
+        }
+        replacedOutputs++;
+        return 0;
+    }
+
+    private double finite(double sample) {
+        if (Math.abs(sample) <= Double.MAX_VALUE) {
+            return sample;
         }
         replacedOutputs++;
         return 0;

@@ -85,6 +85,9 @@ class AllPassFormTest {
         "44100, 59.94, 0.7",
         "8000, 3333.3, 17",
         "96000, 47000, 0.3",
+        "48000, 9000, 11000",
+        "44100, 5000, 9871.3",
+        "48000, 7000, 10234.5",
         "48000, 9000, 20000"
     })
     void unityAtBothEndsToTheLastBit(double rate, double centreHz, double widthHz) {

@@ -119,7 +119,9 @@ class CookbookTest {
         assertEquals(expected, high.b0(), 1e-14 * expected);
     }
 
-    /** Widths measured by root search on the note's formulas: the bandwidth formula is not exact after the transform. */
+    /**
+     * Widths measured by root search on the note's formulas: the bandwidth formula is not exact after the transform.
+     */
     @ParameterizedTest
     @CsvSource({"0.1, 0.099998", "1, 0.997976", "2, 1.983098"})
     void octavesAsMeasured(double octaves, double measured) {

@@ -10,6 +10,7 @@ import io.github.polewright.Table;
 import io.github.polewright.design.DcNotch;
 import io.github.polewright.design.HumComb;
 import io.github.polewright.design.HumNotch;
+import java.math.BigDecimal;
 import java.util.List;
 import org.jtransforms.fft.DoubleFFT_1D;
 import org.junit.jupiter.api.Test;
@@ -102,7 +103,9 @@ class ResponseTest {
         return Cascade.of(rate, sections);
     }
 
-    /** ITU-R BS.1770 tables at 48 kHz: the filters' curve, and +0.691 dB at 997 Hz, which the standard's offset undoes. */
+    /**
+     * ITU-R BS.1770 tables at 48 kHz: the filters' curve, and +0.691 dB at 997 Hz, which the standard's offset undoes.
+     */
     @Test
     void weightingOfBs1770() {
         List<Section> stages = Table.rows(ResponseTest.class, "kweighting.csv", ",").stream()
@@ -199,6 +202,17 @@ class ResponseTest {
         Response notch = Response.of(192000, HumNotch.byWidth(192000, 50, 0.5, 40));
         assertEquals(new Complex(1, 0), notch.at(0));
         assertEquals(1, notch.at(96000).real(), 1e-15);
+    }
+
+    /** Taps that nearly cancel, added as decimals: a plain sum of doubles keeps only nine digits of them. */
+    @Test
+    void gainAtTheEndsOfNearlyCancellingTaps() {
+        Section taps = Section.of(0.1, -1.1, 1.00000003, 0, 0);
+        BigDecimal sum = new BigDecimal(0.1).add(new BigDecimal(-1.1)).add(new BigDecimal(1.00000003));
+        double expected = sum.doubleValue();
+        assertEquals(expected, Response.of(48000, taps).at(0).real(), 1e-15 * expected);
+        Section mirrored = Section.of(0.1, 1.1, 1.00000003, 0, 0);
+        assertEquals(-expected, -Response.of(48000, mirrored).at(24000).real(), 1e-15 * expected);
     }
 
     @Test

@@ -70,8 +70,7 @@ final class ToneBank implements InnerSamples {
             // For a tone at the centre w[n] - w[n-2] is a quarter turn ahead of w[n-1] times this over b0.
             quadrature[k] = 2 * section.b0() * Math.sin(2 * Math.PI * tone.frequencyHz() / rate);
             correction[k] = 1 / frontEnd.powerGain(tone.frequencyHz());
-            delayFrames[k] =
-                    LN_2 * tone.decaySeconds() * sampleRateHz + frontEnd.delayFrames(tone.frequencyHz());
+            delayFrames[k] = LN_2 * tone.decaySeconds() * sampleRateHz + frontEnd.delayFrames(tone.frequencyHz());
             longest = Math.max(longest, tone.decaySeconds());
         }
         energyShare = 1 - Math.exp(-1 / (longest * rate));

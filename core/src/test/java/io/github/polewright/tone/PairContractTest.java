@@ -112,7 +112,8 @@ final class PairContractTest {
             quiet.process(frames, 0, frames.length);
             expected.addAll(drain(quiet));
         }
-        PairReader reader = PairReader.builder(8000).eventCapacity(4 * SENT.length()).build();
+        PairReader reader =
+                PairReader.builder(8000).eventCapacity(4 * SENT.length()).build();
         AtomicBoolean done = new AtomicBoolean();
         List<PairReadings.Kept> seen = new ArrayList<>();
         Thread control = new Thread(() -> {

@@ -15,13 +15,25 @@ import org.junit.jupiter.params.provider.CsvSource;
 final class PairImpairmentTest {
 
     @ParameterizedTest
-    @CsvSource({"60,5,60,1", "60,10,60,1", "25,5,25,1", "25,10,25,1", "15,10,40,1", "60,30,60,2", "60,40,60,2",
-        "20,20,20,0", "20,30,20,0"})
+    @CsvSource({
+        "60,5,60,1",
+        "60,10,60,1",
+        "25,5,25,1",
+        "25,10,25,1",
+        "15,10,40,1",
+        "60,30,60,2",
+        "60,40,60,2",
+        "20,20,20,0",
+        "20,30,20,0"
+    })
     void bridgesInterruptionsAndNoPauses(double before, double gap, double after, int symbols) {
         for (double rate : new double[] {8000, 48000}) {
             for (char symbol : PairSignal.SYMBOLS.toCharArray()) {
                 PairSignal signal = new PairSignal(rate, symbol).pause(0.1);
-                signal.pair(symbol, -10, before / 1000).pause(gap / 1000).pair(symbol, -10, after / 1000).pause(0.1);
+                signal.pair(symbol, -10, before / 1000)
+                        .pause(gap / 1000)
+                        .pair(symbol, -10, after / 1000)
+                        .pause(0.1);
                 String read = PairReadings.symbols(PairReadings.read(PairReader.of(rate), signal.frames()));
                 assertEquals(String.valueOf(symbol).repeat(symbols), read);
             }
@@ -40,7 +52,9 @@ final class PairImpairmentTest {
         PairReader notched = PairReader.builder(8000).dialTone(350, 440).build();
         assertEquals("", readOver(plain, 440, 3));
         assertEquals(PairSignal.SYMBOLS, readOver(notched, 440, 3));
-        assertEquals(PairSignal.SYMBOLS, readOver(PairReader.builder(8000).dialTone(440).build(), 443, -3));
+        assertEquals(
+                PairSignal.SYMBOLS,
+                readOver(PairReader.builder(8000).dialTone(440).build(), 443, -3));
     }
 
     private static String readOver(PairReader reader, double hertz, double relativeDb) {
@@ -55,9 +69,24 @@ final class PairImpairmentTest {
     @Test
     void refusesWhatIsNoPair() {
         double[][] sounds = {
-            {350, 440}, {440, 480}, {480, 620}, {425}, {700, 900}, {1100, 1700}, {900, 1500}, {985, 1428, 1777}, {2000},
-            {697, 770}, {1209, 1336}, {697, 770, 1209}, {697, 1209, 1477}, {697, 1209, 2000}, {835, 1670},
-            {697, 1209, 1394, 2418}, {941, 1882}, {852, 1209, 941, 1477}
+            {350, 440},
+            {440, 480},
+            {480, 620},
+            {425},
+            {700, 900},
+            {1100, 1700},
+            {900, 1500},
+            {985, 1428, 1777},
+            {2000},
+            {697, 770},
+            {1209, 1336},
+            {697, 770, 1209},
+            {697, 1209, 1477},
+            {697, 1209, 2000},
+            {835, 1670},
+            {697, 1209, 1394, 2418},
+            {941, 1882},
+            {852, 1209, 941, 1477}
         };
         for (double rate : new double[] {8000, 48000}) {
             for (double[] sound : sounds) {
@@ -65,7 +94,10 @@ final class PairImpairmentTest {
                 for (double hertz : sound) {
                     signal.under(hertz, -12);
                 }
-                assertEquals(0, PairReadings.read(PairReader.of(rate), signal.frames()).size(), hertz(sound));
+                assertEquals(
+                        0,
+                        PairReadings.read(PairReader.of(rate), signal.frames()).size(),
+                        hertz(sound));
             }
             float[] noise = new PairSignal(rate, 2).pause(20).noise(-20, 0).frames();
             assertEquals(0, PairReadings.read(PairReader.of(rate), noise).size());
@@ -90,7 +122,8 @@ final class PairImpairmentTest {
                     0.08);
             signal.pause(0.05);
         }
-        List<PairReadings.Kept> events = PairReadings.read(PairReader.of(rate), signal.pause(0.1).frames());
+        List<PairReadings.Kept> events =
+                PairReadings.read(PairReader.of(rate), signal.pause(0.1).frames());
         assertEquals(32, events.size());
         for (int i = 0; i < 16; i++) {
             PairReadings.Kept end = events.get(2 * i + 1);
@@ -104,11 +137,20 @@ final class PairImpairmentTest {
     @ParameterizedTest
     @CsvSource({
         // column, level operated in dBm, level not, error percent, Hz, twist dB, interruption ms, pause ms
-        "NTT,-24,-29,1.8,0,5,10,30", "AT_AND_T,-25,-55,1.5,0,4,10,40", "DANISH,-27,-36,1.5,2,6,20,40",
-        "AUSTRALIAN,-27,-30,1.5,4,10,12,70", "BRAZILIAN,-25,-50,1.8,0,9,10,30"
+        "NTT,-24,-29,1.8,0,5,10,30",
+        "AT_AND_T,-25,-55,1.5,0,4,10,40",
+        "DANISH,-27,-36,1.5,2,6,20,40",
+        "AUSTRALIAN,-27,-30,1.5,4,10,12,70",
+        "BRAZILIAN,-25,-50,1.8,0,9,10,30"
     })
     void followsTheColumnsOfTableA1(
-            String column, double operated, double not, double percent, double hertz, double twist, double gap,
+            String column,
+            double operated,
+            double not,
+            double percent,
+            double hertz,
+            double twist,
+            double gap,
             double pause) {
         PairLimits limits =
                 switch (column) {

@@ -30,7 +30,8 @@ final class ToneMeterTest {
         ToneMeter meter = ToneMeter.builder(rate).tone(tone).build();
         double response = tone.responseSeconds();
         double seconds = 6 * response + 0.1;
-        PairSignal signal = new PairSignal(rate, 1).pause(0.1).tone(hertz, -20, seconds).pause(5 * response + 0.1);
+        PairSignal signal =
+                new PairSignal(rate, 1).pause(0.1).tone(hertz, -20, seconds).pause(5 * response + 0.1);
         float[] frames = signal.frames();
         int middle = (int) ((0.1 + seconds * 0.9) * rate);
         meter.process(frames, 0, middle);
@@ -99,7 +100,8 @@ final class ToneMeterTest {
 
     @Test
     void allocatesNothing() {
-        float[] frames = new PairSignal(48000, 1).tone(1000, -20, 0.2).pause(0.2).frames();
+        float[] frames =
+                new PairSignal(48000, 1).tone(1000, -20, 0.2).pause(0.2).frames();
         ToneMeter meter = meter();
         CadenceReader reader = CadenceReader.builder(48000)
                 .cadence(Cadence.of(new double[] {1000}, 0.2, 0.2))
@@ -124,7 +126,10 @@ final class ToneMeterTest {
                 .cadence(Cadence.unbroken(new double[] {350, 440}, 1))
                 .cadence(Cadence.of(new double[] {425}, 0.1, 0.1, 0.1, 0.7))
                 .build();
-        PairSignal signal = new PairSignal(rate, 1).pause(0.3).pair('1', 350, 440, -20, -20, 2).pause(1);
+        PairSignal signal = new PairSignal(rate, 1)
+                .pause(0.3)
+                .pair('1', 350, 440, -20, -20, 2)
+                .pause(1);
         for (int i = 0; i < 4; i++) {
             signal.pair('1', 480, 620, -24, -22, 0.52).pause(0.48);
         }
@@ -186,8 +191,10 @@ final class ToneMeterTest {
                 IllegalArgumentException.class,
                 () -> Cadence.of(new double[] {425}, 1, 1).withTolerance(1));
         assertThrows(
-                IllegalArgumentException.class, () -> CadenceReader.builder(8000).cycles(0));
+                IllegalArgumentException.class,
+                () -> CadenceReader.builder(8000).cycles(0));
         assertThrows(
-                IllegalArgumentException.class, () -> CadenceReader.builder(8000).build());
+                IllegalArgumentException.class,
+                () -> CadenceReader.builder(8000).build());
     }
 }

@@ -113,8 +113,8 @@ public final class CadenceReader {
         int a = ring.firstLong(slot);
         ring.longs[a] = isEnd ? 1 : 0;
         ring.longs[a + 1] = cadence;
-        ring.longs[a + 2] = bank.frameOf(tracker.firstTone, tracker.start());
-        ring.longs[a + 3] = isEnd ? bank.frameOf(tracker.firstTone, tracker.end()) : -1;
+        ring.longs[a + 2] = bank.frameOf(tracker.firstTone, (double) tracker.start());
+        ring.longs[a + 3] = isEnd ? bank.frameOf(tracker.firstTone, (double) tracker.end()) : -1;
         ring.publish();
     }
 

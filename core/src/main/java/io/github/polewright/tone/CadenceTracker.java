@@ -129,11 +129,12 @@ final class CadenceTracker {
         double length = change - since;
         int longest = 0;
         for (int i = 0; i < chain.length; i++) {
-            boolean fits = known && present == (i % 2 == 0) && length >= least[i] && length <= most[i];
             int before = i == 0 ? chain.length - 1 : i - 1;
-            nextChain[i] = fits ? chain[before] + 1 : 0;
-            nextChainStart[i] = fits && chain[before] > 0 ? chainStart[before] : since;
-            if (nextChain[i] > longest && (present || nextChain[i] > 1)) {
+            boolean fits = known && present == (i % 2 == 0) && length >= least[i] && length <= most[i];
+            // A chain begins with the tone: a pause alone says nothing.
+            nextChain[i] = fits && (present || chain[before] > 0) ? chain[before] + 1 : 0;
+            nextChainStart[i] = chain[before] > 0 ? chainStart[before] : since;
+            if (nextChain[i] > longest) {
                 longest = nextChain[i];
                 start = on ? start : nextChainStart[i];
             }

@@ -1,5 +1,7 @@
 package io.github.polewright.tone;
 
+import java.util.Arrays;
+
 /**
  * On and off of one tone, from its power at every hop. The level is trusted three time constants after it passed the
  * threshold; the start is then where the amplitude passed half of it, the end where it fell below half.
@@ -34,7 +36,7 @@ final class ToneTracker {
     }
 
     void reset() {
-        java.util.Arrays.fill(history, 0);
+        Arrays.fill(history, 0);
         above = 0;
         on = false;
     }

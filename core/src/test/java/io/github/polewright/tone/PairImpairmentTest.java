@@ -3,6 +3,7 @@ package io.github.polewright.tone;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -105,7 +106,7 @@ final class PairImpairmentTest {
     }
 
     private static String hertz(double[] sound) {
-        return java.util.Arrays.toString(sound);
+        return Arrays.toString(sound);
     }
 
     @ParameterizedTest

@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.SplittableRandom;
 
@@ -70,7 +71,7 @@ final class PairSignal {
 
     private void grow(int count) {
         if (length + count > samples.length) {
-            samples = java.util.Arrays.copyOf(samples, Math.max(2 * samples.length, length + count));
+            samples = Arrays.copyOf(samples, Math.max(2 * samples.length, length + count));
         }
         length += count;
     }
@@ -91,6 +92,14 @@ final class PairSignal {
         return this;
     }
 
+    /** What a converter would do to samples beyond full scale. */
+    PairSignal clipped() {
+        for (int i = 0; i < length; i++) {
+            samples[i] = Math.max(-1, Math.min(1, samples[i]));
+        }
+        return this;
+    }
+
     double random(double least, double most) {
         return least + (most - least) * random.nextDouble();
     }
@@ -104,6 +113,6 @@ final class PairSignal {
     }
 
     double[] samples() {
-        return java.util.Arrays.copyOf(samples, length);
+        return Arrays.copyOf(samples, length);
     }
 }

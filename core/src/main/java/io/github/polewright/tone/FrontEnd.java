@@ -2,7 +2,6 @@ package io.github.polewright.tone;
 
 import io.github.polewright.Section;
 import io.github.polewright.design.Cookbook;
-import io.github.polewright.design.DcNotch;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -11,31 +10,29 @@ import java.util.List;
 final class FrontEnd {
 
     private static final double SMALLEST = 1e-30;
-    private static final double DC_CORNER_HZ = 20;
 
     private final double sampleRateHz;
     private final int factor;
-    private final List<Section> sections;
+    private final Section[] sections;
     private final double[] state;
     private int skip;
 
     private FrontEnd(double sampleRateHz, int factor, List<Section> sections) {
         this.sampleRateHz = sampleRateHz;
         this.factor = factor;
-        this.sections = List.copyOf(sections);
+        this.sections = sections.toArray(new Section[0]);
         this.state = new double[2 * sections.size()];
     }
 
     /**
-     * A DC blocker, a Butterworth low-pass of order 6 where there is something above it to keep out, and notches.
+     * Some sections, and a Butterworth low-pass of order 6 where there is something above it to keep out.
      *
      * @param factor keeps one sample of so many
      * @param lowPassHz corner of the low-pass; infinite for none
-     * @param notches run before all else
+     * @param first run before the low-pass; one of them must take out DC
      */
-    static FrontEnd of(double sampleRateHz, int factor, double lowPassHz, List<Section> notches) {
-        List<Section> sections = new ArrayList<>(notches);
-        sections.add(DcNotch.byCorner(sampleRateHz, DC_CORNER_HZ));
+    static FrontEnd of(double sampleRateHz, int factor, double lowPassHz, List<Section> first) {
+        List<Section> sections = new ArrayList<>(first);
         if (lowPassHz < sampleRateHz / 2) {
             for (int i = 0; i < 3; i++) {
                 double q = 0.5 / Math.sin((2 * i + 1) * Math.PI / 12);
@@ -60,8 +57,8 @@ final class FrontEnd {
 
     /** Filters {@code count} samples in place and packs those kept to the start; the number kept is the answer. */
     int process(double[] samples, int count) {
-        for (int k = 0; k < sections.size(); k++) {
-            section(sections.get(k), 2 * k, samples, count);
+        for (int k = 0; k < sections.length; k++) {
+            section(sections[k], 2 * k, samples, count);
         }
         int kept = 0;
         int next = skip;

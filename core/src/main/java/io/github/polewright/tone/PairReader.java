@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import io.github.polewright.Section;
+import io.github.polewright.design.Cookbook;
 import io.github.polewright.design.HumNotch;
 import java.util.ArrayList;
 import java.util.List;
@@ -29,6 +30,10 @@ public final class PairReader {
     private static final String SYMBOLS = "123A456B789C*0#D";
     private static final double INNER_RATE_HZ = 8000;
     private static final double LOW_PASS_HZ = 3000;
+
+    /** Below the telephone band, and low enough to leave the pairs alone: takes out DC and most of a hum. */
+    private static final double HIGH_PASS_HZ = 150;
+
     private static final double DELAY_AT_HZ = 1000;
 
     private final Intake intake;
@@ -43,11 +48,13 @@ public final class PairReader {
 
     private PairReader(Builder built) {
         double rate = built.sampleRateHz;
+        List<Section> first = new ArrayList<>(built.notches);
+        first.add(Cookbook.highPass(rate, HIGH_PASS_HZ, Math.sqrt(0.5)));
         frontEnd = FrontEnd.of(
                 rate,
                 (int) Math.floor(rate / INNER_RATE_HZ),
                 rate > INNER_RATE_HZ ? LOW_PASS_HZ : Double.POSITIVE_INFINITY,
-                built.notches);
+                first);
         double innerRate = frontEnd.innerRateHz();
         int hopSamples = PairSpectrum.hopSamples(innerRate);
         double hopSeconds = hopSamples / innerRate;
@@ -291,7 +298,7 @@ public final class PairReader {
 
         /**
          * Tones that sound under the pairs, such as a dial tone, and are to be taken out first by notches of 60 Hz width.
-         * None unless set: a pair then survives a dial tone whose every tone is 10 dB below the pair's.
+         * None unless set: a pair then survives a dial tone of two whose every tone is 11 dB below the pair's.
          *
          * @param hertz 300 to 500 Hz each, so that the pairs keep their levels within 0.2 dB
          * @return this

@@ -17,7 +17,7 @@ final class PairTracker {
     /** Greatest ratio of a tone's powers within a run, about 4 dB. */
     private static final double STEADY = 2.5;
 
-    /** The first good hop of a run sees a window that is still filling: it says nothing about steadiness. */
+    /** The first good hop of a run sees a window that is still filling: it says nothing about steadiness or share. */
     private static final int FILLING_HOPS = 1;
 
     /** Only a dip below this share of the run's peak energy may be bridged: sound that goes on is no interruption. */
@@ -29,6 +29,7 @@ final class PairTracker {
     private final double[] tolerance = new double[PairSpectrum.TONES];
     private final double leastTwist;
     private final double greatestTwist;
+    private final double leastPower;
     private final int releaseHops;
     private final PairSink sink;
 
@@ -39,6 +40,8 @@ final class PairTracker {
     private int runMisses;
     private double runStart;
     private double runPeakEnergy;
+    private double runPower;
+    private double runEnergy;
     private double lowLeast;
     private double lowGreatest;
     private double highLeast;
@@ -58,6 +61,8 @@ final class PairTracker {
         }
         leastTwist = limits.leastMeanTwist();
         greatestTwist = limits.greatestMeanTwist();
+        // For sines alone the sum of their squared amplitudes is twice the mean square.
+        leastPower = 2 * limits.leastShare();
         releaseHops = Math.max(1, (int) Math.round(limits.releaseSeconds() / hopSeconds));
         this.sink = sink;
     }
@@ -105,11 +110,14 @@ final class PairTracker {
         }
         run.add(hop);
         return runCount >= QUALIFYING_HOPS
+                && runPower >= leastPower * runEnergy
                 && run.isNear(tolerance[run.low], tolerance[run.high])
                 && run.isBalanced(leastTwist, greatestTwist);
     }
 
     private void widen(PairHop hop) {
+        runPower += hop.lowPower + hop.highPower;
+        runEnergy += hop.energy;
         double lowPower = hop.tonePower(hop.low);
         double highPower = hop.tonePower(hop.high);
         lowLeast = Math.min(lowLeast, lowPower);
@@ -131,6 +139,8 @@ final class PairTracker {
         runCount = 1;
         runStart = startBefore(hop, index);
         runPeakEnergy = hop.energy;
+        runPower = 0;
+        runEnergy = 0;
         lowLeast = Double.POSITIVE_INFINITY;
         highLeast = Double.POSITIVE_INFINITY;
         lowGreatest = 0;

@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import io.github.polewright.Section;
+import io.github.polewright.design.DcNotch;
 import io.github.polewright.design.Resonator;
 import java.util.Arrays;
 import java.util.List;
@@ -22,6 +23,7 @@ final class ToneBank implements InnerSamples {
 
     static final double LOWEST_INNER_RATE_HZ = 8000;
 
+    private static final double DC_CORNER_HZ = 20;
     private static final double HOP_SECONDS = 0.001;
     private static final double PASS_SHARE = 0.375;
     private static final double SMALLEST = 1e-30;
@@ -90,8 +92,9 @@ final class ToneBank implements InnerSamples {
         double wanted = Math.max(LOWEST_INNER_RATE_HZ, highest / PASS_SHARE);
         int factor = Math.max(1, (int) Math.floor(sampleRateHz / wanted));
         double corner = PASS_SHARE * sampleRateHz / factor;
+        Section dc = DcNotch.byCorner(sampleRateHz, DC_CORNER_HZ);
         boolean filtered = sampleRateHz > LOWEST_INNER_RATE_HZ && highest <= corner;
-        return FrontEnd.of(sampleRateHz, factor, filtered ? corner : Double.POSITIVE_INFINITY, List.of());
+        return FrontEnd.of(sampleRateHz, factor, filtered ? corner : Double.POSITIVE_INFINITY, List.of(dc));
     }
 
     FrontEnd frontEnd() {

@@ -254,6 +254,7 @@ final class PairContractTest {
         refused("lowestDb", () -> PairLimits.RECOMMENDED.withTwist(1, 4));
         refused("highestDb", () -> PairLimits.RECOMMENDED.withTwist(-8, 13));
         refused("dbfs", () -> PairLimits.RECOMMENDED.withFloor(1));
+        refused("share", () -> PairLimits.RECOMMENDED.withShare(0.96));
         refused("seconds", () -> PairLimits.RECOMMENDED.withRelease(0));
         PairReader stereo = PairReader.builder(8000).channel(1, 2).build();
         float[] ten = {9, 9, 9, 9, 9, 9, 9, 9, 9, 9};

@@ -42,9 +42,35 @@ final class PairImpairmentTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"50,-3", "400,-6", "1000,-10", "1800,-6", "2500,-6"})
-    void readsPairsOverAThirdTone(double hertz, double relativeDb) {
-        assertEquals(PairSignal.SYMBOLS, readOver(PairReader.of(8000), hertz, relativeDb));
+    @CsvSource({
+        "50,-3,0.91",
+        "60,-3,0.91",
+        "400,-8,0.91",
+        "1000,-10,0.91",
+        "1800,-8,0.91",
+        "2500,-8,0.91",
+        "400,-6,0.8",
+        "1800,-6,0.8",
+        "2500,-6,0.8"
+    })
+    void readsPairsOverAThirdTone(double hertz, double relativeDb, double share) {
+        PairReader reader = PairReader.builder(8000)
+                .limits(PairLimits.RECOMMENDED.withShare(share))
+                .build();
+        assertEquals(PairSignal.SYMBOLS, readOver(reader, hertz, relativeDb));
+    }
+
+    @Test
+    void readsPairsOverASoftDialToneAndDc() {
+        PairSignal signal = new PairSignal(8000, 11).pause(0.2);
+        for (char symbol : PairSignal.SYMBOLS.toCharArray()) {
+            signal.pair(symbol, -15, 0.06).pause(0.06);
+        }
+        float[] frames = signal.pause(0.1).under(350, -26).under(440, -26).frames();
+        for (int i = 0; i < frames.length; i++) {
+            frames[i] += 0.3f;
+        }
+        assertEquals(PairSignal.SYMBOLS, PairReadings.symbols(PairReadings.read(PairReader.of(8000), frames)));
     }
 
     @Test

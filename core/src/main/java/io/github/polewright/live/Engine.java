@@ -1,6 +1,7 @@
 package io.github.polewright.live;
 
 import io.github.polewright.slab.Slab;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Runs all sections over a slab: keeps the states, chooses the loops, walks the coefficients. The audio thread's own.
@@ -16,7 +17,12 @@ final class Engine {
     private final Slab slab;
     private final double[] samples;
     private final Course course;
+    private final @Nullable Rows rows;
     private final double[] states;
+    /** One section's coefficients, frame by frame, while they glide. */
+    private final double[][] moving = new double[5][Slab.FRAMES];
+
+    private final double[] ticks = new double[Slab.FRAMES];
     private double[] old;
     private double[] next;
     private long clock;
@@ -29,6 +35,7 @@ final class Engine {
         this.slab = new Slab(channels);
         this.samples = slab.samples();
         this.course = new Course(initial, 5 * sections);
+        this.rows = Rows.pay(channels, sections) ? new Rows(transposed, channels, sections) : null;
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
         this.next = new double[old.length];
@@ -64,7 +71,9 @@ final class Engine {
     /** Filters what the slab holds, in place. */
     void run(int frames) {
         int untilGuard = Guard.framesUntil(clock);
-        if (course.gliding()) {
+        if (rows != null) {
+            runRows(rows, frames, untilGuard);
+        } else if (course.gliding()) {
             glide(frames, untilGuard);
         } else if (transposed) {
             runTransposed(frames, untilGuard);
@@ -80,6 +89,17 @@ final class Engine {
         clock += frames;
         if ((clock & (Slab.FRAMES - 1)) == 0) {
             contain();
+        }
+    }
+
+    private void runRows(Rows all, int frames, int untilGuard) {
+        double[] c = course.coefficients();
+        if (course.gliding()) {
+            all.glide(samples, frames, untilGuard, c, course.step(), course.passed(), old, next);
+        } else if (transposed) {
+            all.transposed(samples, frames, untilGuard, c, states, old, next);
+        } else {
+            all.direct(samples, frames, untilGuard, c, old, next);
         }
     }
 
@@ -106,7 +126,15 @@ final class Engine {
 
     private void runTransposed(int frames, int untilGuard) {
         double[] c = course.coefficients();
-        for (int channel = 0; channel < channels; channel++) {
+        int channel = 0;
+        for (; channel + 2 <= channels; channel += 2) {
+            int from = channel * Slab.FRAMES;
+            for (int section = 0; section < sections; section++) {
+                RawTransposed.stereo(
+                        samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
+            }
+        }
+        if (channel < channels) {
             int from = channel * Slab.FRAMES;
             int section = 0;
             for (; section + 2 <= sections; section += 2) {
@@ -122,37 +150,23 @@ final class Engine {
         double[] c = course.coefficients();
         double[] step = course.step();
         int passed = course.passed();
-        for (int section = 0; section < sections; section++) {
-            int channel = 0;
-            for (; channel + 2 <= channels; channel += 2) {
-                RawGlide.stereo(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        int last = channels - 1;
+        if (channels > 1) {
+            for (int i = 0; i < frames; i++) {
+                ticks[i] = passed + 1 + i;
             }
-            if (channel < channels) {
-                RawGlide.one(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        }
+        for (int section = 0; section < sections; section++) {
+            if (channels > 1) {
+                RawGlide.coefficients(moving, ticks, frames, c, step, section);
+            }
+            for (int channel = 0; channel < last; channel += 2) {
+                int from = channel * Slab.FRAMES;
+                RawGlide.stereo(samples, from, frames, untilGuard, moving, section, old, next, channels, channel);
+            }
+            if ((channels & 1) != 0) {
+                int from = last * Slab.FRAMES;
+                RawGlide.one(samples, from, frames, untilGuard, c, step, passed, section, old, next, channels, last);
             }
         }
     }

@@ -28,10 +28,13 @@ import java.util.concurrent.atomic.AtomicReference;
  */
 public final class LiveCascade {
 
+    private static final double MOST_WARM_UP_SECONDS = 600;
+
     private final double sampleRateHz;
     private final int channels;
     private final int mostSections;
     private final int rampFrames;
+    private final Form form;
     private final Engine engine;
     private final Slab slab;
     private final AtomicReference<Path> slot;
@@ -46,6 +49,7 @@ public final class LiveCascade {
         this.channels = channels;
         this.mostSections = mostSections;
         this.rampFrames = rampFrames;
+        this.form = form;
         Path initial = new Path(0, new int[] {1}, new double[][] {coefficients(cascade)});
         this.engine = new Engine(form, channels, mostSections, initial);
         this.slab = engine.slab();
@@ -185,6 +189,29 @@ public final class LiveCascade {
      */
     public void reset() {
         engine.reset();
+    }
+
+    /**
+     * Lets the JVM compile the loops before the stream starts: runs a twin of this cascade on scratch samples until the
+     * cost of a block no longer falls. This cascade's states, coefficients and counters stay as they are. Control
+     * thread; takes a core for as long as it lasts, typically a third of a second.
+     *
+     * @param mostSeconds when to stop in any case, above 0 to 600
+     * @return how the cost fell
+     * @throws IllegalArgumentException if {@code mostSeconds} is out of range
+     */
+    public WarmUp warmUp(double mostSeconds) {
+        if (!(mostSeconds > 0 && mostSeconds <= MOST_WARM_UP_SECONDS)) {
+            throw new IllegalArgumentException(
+                    "mostSeconds is " + mostSeconds + "; it must be above 0 and at most " + MOST_WARM_UP_SECONDS);
+        }
+        return new Warming(twin(), System::nanoTime).run(mostSeconds);
+    }
+
+    /** A silent one of the same shape that passes everything through. */
+    LiveCascade twin() {
+        return new LiveCascade(
+                Cascade.of(sampleRateHz, Section.PASS_THROUGH), channels, form, mostSections, rampFrames);
     }
 
     /**

@@ -13,11 +13,11 @@ import java.util.Collections;
  */
 final class Rehearsal {
 
-    private static final int SECTIONS = 7;
-
     static {
         for (Form form : Form.values()) {
-            perform(form);
+            perform(form, 1, 7);
+            perform(form, 2, 1);
+            perform(form, 32, 8);
         }
     }
 
@@ -28,14 +28,16 @@ final class Rehearsal {
         // Calling a static method is what sets up the class.
     }
 
-    private static void perform(Form form) {
-        Cascade cascade = Cascade.of(1, Collections.nCopies(SECTIONS, Section.PASS_THROUGH));
-        LiveCascade live = new LiveCascade(cascade, 1, form, SECTIONS, 1);
+    private static void perform(Form form, int channels, int sections) {
+        Cascade cascade = Cascade.of(1, Collections.nCopies(sections, Section.PASS_THROUGH));
+        LiveCascade live = new LiveCascade(cascade, channels, form, sections, 1);
         // One sample that is replaced, and one that makes the channel restart.
-        double[] doubles = {Double.NaN, Double.MAX_VALUE, 0};
-        float[] floats = new float[3];
-        float[][] planes = {floats};
-        FloatBuffer buffer = ByteBuffer.allocateDirect(3 * Float.BYTES)
+        double[] doubles = new double[3 * channels];
+        doubles[0] = Double.NaN;
+        doubles[channels] = Double.MAX_VALUE;
+        float[] floats = new float[3 * channels];
+        float[][] planes = new float[channels][3];
+        FloatBuffer buffer = ByteBuffer.allocateDirect(3 * channels * Float.BYTES)
                 .order(ByteOrder.nativeOrder())
                 .asFloatBuffer();
         live.process(doubles, 0, doubles, 0, 3);

@@ -6,7 +6,6 @@ import io.github.polewright.bench.workload.Motion;
 import io.github.polewright.bench.workload.Samples;
 import io.github.polewright.bench.workload.Signal;
 import io.github.polewright.bench.workload.Tape;
-import io.github.polewright.bench.workload.WarmUp;
 import io.github.polewright.live.LiveCascade;
 import java.lang.management.GarbageCollectorMXBean;
 import java.lang.management.ManagementFactory;
@@ -21,7 +20,9 @@ final class Soak {
 
     static SoakResult play(Chain chain, double seconds, int allocators, Duration warmUp) throws InterruptedException {
         LiveRig rig = new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
-        WarmUp.of(chain, Samples.FLOAT, warmUp);
+        if (!warmUp.isZero()) {
+            rig.live().warmUp(warmUp.toMillis() / 1e3);
+        }
         long collections = collections();
         long collectionMillis = collectionMillis();
         long disturbedNanos = Math.round(seconds * 1e9);

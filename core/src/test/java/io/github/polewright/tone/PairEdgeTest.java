@@ -8,8 +8,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
 /**
- * Where reading ends. Each edge is walked outwards from what must be read to what must be refused: up to the first value
- * all is read, from the second on nothing.
+ * Where reading ends. Each edge is walked outwards from what must be read to what must be refused (for noise, where the share
+ * asked for refuses it): up to the first value all is read, from the second on nothing.
  */
 @Tag("slow")
 final class PairEdgeTest {
@@ -27,6 +27,7 @@ final class PairEdgeTest {
         walk("twist, dB", rate, 4, 10, 0.1, v -> plain.levels(-10 - v, -10));
         walk("twist, dB", rate, -8, -14, 0.1, v -> plain.levels(-10, -10 + v));
         walk("level, dBFS", rate, -28, -40, 0.2, v -> plain.levels(v, v));
+        walk("signal to noise, dB", rate, 12, 6, 0.25, plain::noise);
         walk("tone, ms", rate, 40, 23, 0.5, v -> plain.lasting(v / 1000, 0.06));
     }
 

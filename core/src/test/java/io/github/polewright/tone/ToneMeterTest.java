@@ -171,6 +171,32 @@ final class ToneMeterTest {
     }
 
     @Test
+    void countsACadenceFromItsFirstWholeTone() {
+        CadenceReader reader = CadenceReader.builder(8000)
+                .cadence(Cadence.of(new double[] {480, 620}, 0.5, 0.5))
+                .build();
+        PairSignal signal = new PairSignal(8000, 1).pause(0.3);
+        for (double seconds : new double[] {1, 0.5, 1}) {
+            signal.pair('1', 480, 620, -20, -20, seconds).pause(0.5);
+        }
+        float[] once = signal.pause(1).frames();
+        reader.process(once, 0, once.length);
+        CadenceEvent event = new CadenceEvent();
+        assertTrue(!reader.poll(event), "one tone of the right length between two that are too long: " + event);
+        signal = new PairSignal(8000, 1).pause(0.3);
+        for (double seconds : new double[] {1, 0.5, 0.5}) {
+            signal.pair('1', 480, 620, -20, -20, seconds).pause(0.5);
+        }
+        float[] twice = signal.pause(1).frames();
+        reader.reset();
+        reader.process(twice, 0, twice.length);
+        assertTrue(reader.poll(event) && !event.isEnd(), event.toString());
+        assertEquals(1.8, event.startFrame() / 8000.0, 0.015);
+        assertTrue(reader.poll(event) && event.isEnd(), event.toString());
+        assertEquals(3.3, event.endFrame() / 8000.0, 0.015);
+    }
+
+    @Test
     void badWishesAreRefused() {
         assertThrows(IllegalArgumentException.class, () -> Tone.byWidth(10, 20));
         assertThrows(IllegalArgumentException.class, () -> Tone.byWidth(1000, 0));

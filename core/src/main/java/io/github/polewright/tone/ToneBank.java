@@ -9,10 +9,8 @@ import java.util.List;
 /**
  * Resonators, one a tone, and the powers of all every millisecond.
  *
- * <p>A resonator costs two multiplications and two additions a sample, can be read at any sample and forgets
- * gradually. A Goertzel recursion saves one of each, but can be read once a window: followed every millisecond it costs
- * as many recursions as windows overlap. So a meter of named tones runs resonators, and the pair reader, whose tests
- * need a window that ends, runs Goertzel recursions.
+ * <p>A resonator can be read at any sample and forgets gradually; a Goertzel recursion saves a little, but can be read once
+ * a window. The package's description has the measurement.
  */
 final class ToneBank implements InnerSamples {
 

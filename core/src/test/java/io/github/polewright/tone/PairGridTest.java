@@ -57,7 +57,11 @@ final class PairGridTest {
         }
         all.add(PairCase.of("too much twist", false).levels(-20, -10));
         all.add(PairCase.of("too much twist", false).levels(-10, -24));
+        all.add(PairCase.of("too much twist on average", false).levels(-16.5, -10));
+        all.add(PairCase.of("too much twist on average", false).levels(-10, -20.5));
         all.add(PairCase.of("too soft", false).levels(-40, -40));
+        all.add(PairCase.of("one too soft", false).levels(-38, -35));
+        all.add(PairCase.of("one too soft", false).levels(-35, -38));
         all.add(PairCase.of("low alone", false).levels(-10, -200));
         all.add(PairCase.of("high alone", false).levels(-200, -10));
     }

@@ -2,6 +2,7 @@ package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.retune.Pace;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.FloatBuffer;
@@ -30,7 +31,7 @@ final class Rehearsal {
 
     private static void perform(Form form, int channels, int sections) {
         Cascade cascade = Cascade.of(1, Collections.nCopies(sections, Section.PASS_THROUGH));
-        LiveCascade live = new LiveCascade(cascade, channels, form, sections, 1);
+        LiveCascade live = new LiveCascade(cascade, channels, form, sections, Pace.FOLLOWING);
         // One sample that is replaced, and one that makes the channel restart.
         double[] doubles = new double[3 * channels];
         doubles[0] = Double.NaN;
@@ -46,8 +47,29 @@ final class Rehearsal {
         live.process(buffer, buffer, 3);
         live.retune(cascade.scaledBy(2));
         live.process(doubles, 0, doubles, 0, 3);
-        live.retune(cascade);
-        live.process(doubles, 0, doubles, 0, 3);
+        if (sections > 1) {
+            retunes(live, doubles);
+        }
         live.reset();
+    }
+
+    /** Complex poles and real ones, a glide inside another, a notch that is exchanged, births, deaths, gain. */
+    private static void retunes(LiveCascade live, double[] block) {
+        Section resonant = Section.of(0.1, 0, 0, -0.5, 0.5);
+        Section twoReal = Section.of(0.1, 0, 0, -0.9, 0.2);
+        Section lowNotch = Section.of(1, -1.8, 1, -1.7, 0.9);
+        Section highNotch = Section.of(1, 1.8, 1, 1.7, 0.9);
+        live.outputGain(-6);
+        live.retune(Cascade.of(1, resonant, lowNotch));
+        live.process(block, 0, block, 0, 3);
+        live.retune(Cascade.of(1, twoReal, highNotch));
+        live.process(block, 0, block, 0, 3);
+        live.bypass(true);
+        live.process(block, 0, block, 0, 3);
+        live.bypass(false);
+        while (!live.isSettled()) {
+            live.process(block, 0, block, 0, 3);
+        }
+        live.retuneStatus();
     }
 }

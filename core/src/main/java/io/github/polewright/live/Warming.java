@@ -2,6 +2,8 @@ package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.retune.Glide;
+import io.github.polewright.retune.Pace;
 import io.github.polewright.slab.Slab;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
@@ -31,7 +33,7 @@ final class Warming {
     private static final Section OTHER = Section.of(0.8, -0.4, 0.2, -1.1, 0.5);
 
     private final LiveCascade twin;
-    private final Cascade[] targets;
+    private final Glide[] glides;
     private final LongSupplier nanoClock;
     private final int samples;
     private final double[] doubles;
@@ -44,7 +46,8 @@ final class Warming {
     Warming(LiveCascade twin, LongSupplier nanoClock) {
         this.twin = twin;
         this.nanoClock = nanoClock;
-        this.targets = new Cascade[] {filled(twin, ONE), filled(twin, OTHER)};
+        Cascade one = filled(twin, ONE), other = filled(twin, OTHER);
+        this.glides = new Glide[] {Glide.between(one, other, Pace.SINGLE), Glide.between(other, one, Pace.SINGLE)};
         this.samples = Slab.FRAMES * twin.channels();
         this.doubles = new double[samples];
         this.floats = new float[samples];
@@ -65,9 +68,6 @@ final class Warming {
         double seconds = 0;
         boolean levelled = false;
         for (int round = 0; !levelled && seconds < mostSeconds; round++) {
-            if ((round & 3) == 0) {
-                twin.retune(targets[(round >> 2) & 1]);
-            }
             double nanos = (double) round(round) / (4 * BLOCKS_A_ROUND);
             seconds = (nanoClock.getAsLong() - start) / NANOS_PER_SECOND;
             if (nanos < LEVEL * best) {
@@ -85,6 +85,9 @@ final class Warming {
         long sum = 0;
         for (int i = 0; i < BLOCKS_A_ROUND; i++) {
             fill(i, round);
+            if ((round & 1) == 0 && (i & 3) == 0) {
+                order(i >> 2);
+            }
             int cut = i == BLOCKS_A_ROUND - 1 ? 1 + round % (Slab.FRAMES - 1) : Slab.FRAMES;
             long from = nanoClock.getAsLong();
             twin.process(doubles, 0, doubles, 0, cut);
@@ -98,6 +101,16 @@ final class Warming {
             sum += nanoClock.getAsLong() - from;
         }
         return sum;
+    }
+
+    /** Often enough that the way an order is taken up is compiled as well. */
+    private void order(int number) {
+        switch (number & 7) {
+            case 5 -> twin.outputGain(-number);
+            case 6 -> twin.bypass(true);
+            case 7 -> twin.bypass(false);
+            default -> twin.retune(glides[number & 1]);
+        }
     }
 
     /** Noise in most blocks; silence, dust and rubble in the others. */

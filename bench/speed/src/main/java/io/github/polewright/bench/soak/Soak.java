@@ -19,7 +19,7 @@ final class Soak {
     private Soak() {}
 
     static SoakResult play(Chain chain, double seconds, int allocators, Duration warmUp) throws InterruptedException {
-        LiveRig rig = new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
+        LiveRig rig = rig(chain);
         if (!warmUp.isZero()) {
             rig.live().warmUp(warmUp.toMillis() / 1e3);
         }
@@ -27,7 +27,7 @@ final class Soak {
         long collectionMillis = collectionMillis();
         long disturbedNanos = Math.round(seconds * 1e9);
         long start = System.nanoTime();
-        AudioThread audio = new AudioThread(rig, start + disturbedNanos + Math.round(CALM_SECONDS * 1e9));
+        AudioThread audio = new AudioThread(rig, rig(chain), start + disturbedNanos + Math.round(CALM_SECONDS * 1e9));
         Disturbance disturbance = new Disturbance(rig, allocators);
         audio.start();
         Thread.sleep(Duration.ofNanos(disturbedNanos).toMillis());
@@ -46,6 +46,10 @@ final class Soak {
                 new SoakResult.Counters(
                         live.replacedInputSamples(), live.replacedOutputSamples(), live.channelRestarts()),
                 live.isSettled());
+    }
+
+    private static LiveRig rig(Chain chain) {
+        return new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
     }
 
     private static long collections() {

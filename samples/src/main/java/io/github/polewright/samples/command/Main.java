@@ -71,12 +71,6 @@ public final class Main implements Runnable {
     @Override
     public void run() {
         throw new CommandLine.ParameterException(
-        subcommands = {
-            SurveyCommand.class,
-            CleanCommand.class,
-            TonesCommand.class,
-            RetuneCommand.class,
-            DemoCommand.class
-        },
+                new CommandLine(this), "a command is missing: survey, clean, tones, retune or demo");
     }
 }

@@ -10,6 +10,7 @@ import java.nio.ByteOrder;
 import java.nio.FloatBuffer;
 import java.util.Collections;
 import java.util.Random;
+import java.util.function.DoubleSupplier;
 import java.util.function.LongSupplier;
 
 /**
@@ -26,7 +27,7 @@ final class Warming {
     /** It compiles in the background, so some time has to pass as well. */
     private static final double LEAST_SECONDS = 0.3;
 
-    private static final double LEVEL = 0.98;
+    private static final double LEVEL = 0.95;
     private static final double NANOS_PER_SECOND = 1e9;
     private static final double NANOS_PER_MICRO = 1e3;
     private static final Section ONE = Section.of(0.9, -0.5, 0.2, -1.2, 0.6);
@@ -35,11 +36,8 @@ final class Warming {
     private final LiveCascade twin;
     private final Glide[] glides;
     private final LongSupplier nanoClock;
-    private final int samples;
-    private final double[] doubles;
-    private final float[] floats;
-    private final float[][] planes;
-    private final FloatBuffer buffer;
+    private final Tape[] tapes;
+    private final Tape out;
     private int blocks;
     private long firstNanos;
 
@@ -48,13 +46,15 @@ final class Warming {
         this.nanoClock = nanoClock;
         Cascade one = filled(twin, ONE), other = filled(twin, OTHER);
         this.glides = new Glide[] {Glide.between(one, other, Pace.SINGLE), Glide.between(other, one, Pace.SINGLE)};
-        this.samples = Slab.FRAMES * twin.channels();
-        this.doubles = new double[samples];
-        this.floats = new float[samples];
-        this.planes = new float[twin.channels()][Slab.FRAMES];
-        this.buffer = ByteBuffer.allocateDirect(samples * Float.BYTES)
-                .order(ByteOrder.nativeOrder())
-                .asFloatBuffer();
+        int channels = twin.channels();
+        Random random = new Random(1);
+        this.out = new Tape(channels, () -> 0);
+        Tape noise = new Tape(channels, () -> 0.2 * random.nextDouble() - 0.1);
+        Tape silence = new Tape(channels, () -> 0);
+        Tape dust = new Tape(channels, () -> 1e-310 * random.nextDouble());
+        // Samples that are replaced, and some that make a channel restart.
+        Tape rubble = new Tape(channels, () -> random.nextBoolean() ? Double.NaN : Double.MAX_VALUE);
+        this.tapes = new Tape[] {noise, noise, noise, noise, noise, silence, dust, rubble};
     }
 
     private static Cascade filled(LiveCascade live, Section section) {
@@ -84,19 +84,19 @@ final class Warming {
     private long round(int round) {
         long sum = 0;
         for (int i = 0; i < BLOCKS_A_ROUND; i++) {
-            fill(i, round);
+            Tape in = tapes[i & 7];
             if ((round & 1) == 0 && (i & 3) == 0) {
                 order(i >> 2);
             }
             int cut = i == BLOCKS_A_ROUND - 1 ? 1 + round % (Slab.FRAMES - 1) : Slab.FRAMES;
             long from = nanoClock.getAsLong();
-            twin.process(doubles, 0, doubles, 0, cut);
+            twin.process(in.doubles, 0, out.doubles, 0, cut);
             if (blocks == 0) {
                 firstNanos = nanoClock.getAsLong() - from;
             }
-            twin.process(floats, 0, floats, 0, cut);
-            twin.process(planes, planes, 0, cut);
-            twin.process(buffer, buffer, cut);
+            twin.process(in.floats, 0, out.floats, 0, cut);
+            twin.process(in.planes, out.planes, 0, cut);
+            twin.process(in.buffer, out.buffer, cut);
             blocks += 4;
             sum += nanoClock.getAsLong() - from;
         }
@@ -113,24 +113,28 @@ final class Warming {
         }
     }
 
-    /** Noise in most blocks; silence, dust and rubble in the others. */
-    private void fill(int block, int round) {
-        Random random = new Random(31L * round + block);
-        int kind = block & 15;
-        double scale = kind == 13 ? 0 : kind == 14 ? 1e-310 : 0.1;
-        for (int i = 0; i < samples; i++) {
-            double value = scale * (2 * random.nextDouble() - 1);
-            doubles[i] = value;
-            floats[i] = (float) value;
-            planes[i / Slab.FRAMES][i % Slab.FRAMES] = (float) value;
-            buffer.put(i, (float) value);
-        }
-        if (kind == 15) {
-            // One sample that is replaced, and one that makes the channel restart.
-            doubles[0] = (round & 1) == 0 ? Double.NaN : Double.MAX_VALUE;
-            floats[0] = Float.POSITIVE_INFINITY;
-            planes[0][0] = Float.NaN;
-            buffer.put(0, Float.NaN);
+    /** A block in every format. */
+    private static final class Tape {
+        final double[] doubles;
+        final float[] floats;
+        final float[][] planes;
+        final FloatBuffer buffer;
+
+        Tape(int channels, DoubleSupplier values) {
+            int samples = Slab.FRAMES * channels;
+            doubles = new double[samples];
+            floats = new float[samples];
+            planes = new float[channels][Slab.FRAMES];
+            buffer = ByteBuffer.allocateDirect(samples * Float.BYTES)
+                    .order(ByteOrder.nativeOrder())
+                    .asFloatBuffer();
+            for (int i = 0; i < samples; i++) {
+                double value = values.getAsDouble();
+                doubles[i] = value;
+                floats[i] = (float) value;
+                planes[i / Slab.FRAMES][i % Slab.FRAMES] = (float) value;
+                buffer.put(i, (float) value);
+            }
         }
     }
 }

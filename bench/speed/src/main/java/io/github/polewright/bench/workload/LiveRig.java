@@ -2,6 +2,7 @@ package io.github.polewright.bench.workload;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.live.LiveCascade;
+import io.github.polewright.retune.Glide;
 import io.github.polewright.retune.Pace;
 
 /** A live cascade on a tape. */
@@ -13,7 +14,9 @@ public final class LiveRig extends Rig {
     private static final int RETUNED_RAMP_FRAMES = 4096;
 
     private final Motion motion;
-    private final Cascade[] targets;
+    /** There and back again; prepared beforehand, as on a core of its own: preparing would empty this core's caches. */
+    private final Glide[] glides;
+
     private final LiveCascade live;
     private int retunes;
 
@@ -27,12 +30,14 @@ public final class LiveRig extends Rig {
     public LiveRig(Chain chain, Tape tape, Motion motion) {
         super(chain, tape);
         this.motion = motion;
-        this.targets = new Cascade[] {Combs.movedComb(chain), Combs.comb(chain)};
         int glideFrames = motion == Motion.RAMPING ? LONG_RAMP_FRAMES : RETUNED_RAMP_FRAMES;
-        this.live = LiveCascade.builder(Combs.comb(chain))
+        Pace pace = Pace.FOLLOWING.atLeastSeconds(glideFrames / chain.sampleRateHz());
+        Cascade here = Combs.comb(chain);
+        Glide there = Glide.sweeping(here, Combs.movedComb(chain), pace);
+        this.glides = new Glide[] {there, Glide.sweeping(there.target(), here, pace)};
+        this.live = LiveCascade.builder(here)
                 .channels(chain.channels())
                 .form(chain.form())
-                .pace(Pace.FOLLOWING.atLeastSeconds(glideFrames / chain.sampleRateHz()))
                 .build();
         keepMoving();
     }
@@ -83,7 +88,7 @@ public final class LiveRig extends Rig {
 
     /** Hands over the next target, as a control thread does. */
     public void retune() {
-        live.retune(targets[retunes++ & 1]);
+        live.retune(glides[retunes++ & 1]);
     }
 
     private void process(float[] source) {

@@ -20,7 +20,9 @@ final class Engine {
     private final Slab slab;
     private final double[] samples;
     private final Walk walk;
-    private final OutputGain gain;
+    private final Fader gain;
+    private final Fader presence;
+    private final double[] before;
     private final @Nullable Rows rows;
     private final double[] states;
     /** One section's coefficients, frame by frame, while they glide. */
@@ -34,14 +36,16 @@ final class Engine {
     private long restarts;
 
     /** Starts silent and settled on a cascade of one section a slot. */
-    Engine(Form form, int channels, Cascade start, int gainFrames) {
+    Engine(Form form, int channels, Cascade start, int fadeFrames) {
         this.transposed = form == Form.TRANSPOSED_DIRECT_FORM_2;
         this.channels = channels;
         this.sections = start.sectionCount();
         this.slab = new Slab(channels);
         this.samples = slab.samples();
         this.walk = new Walk(start, Bucket.USUAL_LIMIT);
-        this.gain = new OutputGain(gainFrames);
+        this.gain = new Fader(fadeFrames);
+        this.presence = new Fader(fadeFrames);
+        this.before = new double[samples.length];
         this.rows = Rows.pay(channels, sections) ? new Rows(transposed, channels, sections) : null;
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
@@ -56,8 +60,13 @@ final class Engine {
         return walk;
     }
 
-    OutputGain gain() {
+    Fader gain() {
         return gain;
+    }
+
+    /** How much of the sections is heard: 1, or 0 where they are bypassed. */
+    Fader presence() {
+        return presence;
     }
 
     /** Channels that were set back to silence, since their state was no longer finite. */
@@ -81,6 +90,9 @@ final class Engine {
 
     /** Filters what the slab holds, in place. */
     void run(int frames) {
+        if (!presence.isIdle()) {
+            System.arraycopy(samples, 0, before, 0, samples.length);
+        }
         int untilGuard = Guard.framesUntil(clock);
         boolean steadyTransposed = transposed && walk.isSettled();
         if (steadyTransposed && signalsLead) {
@@ -109,8 +121,12 @@ final class Engine {
 
     private void amplify(int frames) {
         for (int channel = 0; channel < channels; channel++) {
+            if (!presence.isIdle()) {
+                presence.blend(before, samples, channel * Slab.FRAMES, frames);
+            }
             gain.apply(samples, channel * Slab.FRAMES, frames);
         }
+        presence.advance(frames);
         gain.advance(frames);
     }
 

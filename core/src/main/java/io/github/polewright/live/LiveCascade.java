@@ -244,7 +244,7 @@ public final class LiveCascade {
      * @throws IllegalArgumentException as {@link #retune(Cascade)}
      */
     public Glide retune(Cascade target, Pace chosen) {
-        Objects.requireNonNull(chosen, "chosen");
+        Objects.requireNonNull(chosen, "pace");
         Fit.checkRate(target, sampleRateHz);
         Fit.check(target, mostSections);
         return orders.retune(target, chosen);
@@ -264,10 +264,11 @@ public final class LiveCascade {
     }
 
     /**
-     * Fades all sections out until the input comes out unchanged but for the output gain, or back in. Targets handed
-     * over meanwhile are kept and heard afterwards. Any thread, at any time; lock-free.
+     * Fades from the sections to the input, or back, within 50 ms. The sections go on running, so that they are heard
+     * again as if they had never been away; retunes meanwhile are walked unheard. The output gain holds for both. Any
+     * thread, at any time; lock-free.
      *
-     * @param on whether to bypass the sections
+     * @param on whether the input is heard instead of the sections
      */
     public void bypass(boolean on) {
         orders.bypass(on);
@@ -279,7 +280,7 @@ public final class LiveCascade {
      * @param gainDb decibels, at most 120; negative infinity is silence
      * @throws IllegalArgumentException if {@code gainDb} is NaN or above 120
      */
-    public void outputGain(double gainDb) {
+    public void outputGainDb(double gainDb) {
         if (!(gainDb <= MOST_GAIN_DB)) {
             throw new IllegalArgumentException("gainDb is " + gainDb + "; it must be at most " + MOST_GAIN_DB);
         }
@@ -310,7 +311,7 @@ public final class LiveCascade {
      * @return one section for each of {@link #mostSections()}; free ones pass through
      */
     public Cascade target() {
-        return orders.latestAcquire().wish();
+        return orders.latestAcquire().heading();
     }
 
     /**
@@ -376,6 +377,7 @@ public final class LiveCascade {
                 engine.walk().adopt(latest.glide());
             }
             engine.gain().moveTo(latest.gain());
+            engine.presence().moveTo(latest.bypassed() ? 0 : 1);
             order = latest;
             adopted++;
             orders.adoptedRelease(latest);
@@ -383,7 +385,8 @@ public final class LiveCascade {
     }
 
     private void end() {
-        board.writeRelease(engine.walk(), engine.gain().framesLeft(), adopted, order.number());
+        int fading = Math.max(engine.gain().framesLeft(), engine.presence().framesLeft());
+        board.writeRelease(engine.walk(), fading, adopted, order.number());
         replacedInputs.setRelease(slab.replacedInputs());
         replacedOutputs.setRelease(slab.replacedOutputs());
         restarts.setRelease(engine.restarts());

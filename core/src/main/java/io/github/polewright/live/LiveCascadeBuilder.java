@@ -42,7 +42,7 @@ public final class LiveCascadeBuilder {
      * @return this
      */
     public LiveCascadeBuilder form(Form choice) {
-        form = Objects.requireNonNull(choice, "choice");
+        form = Objects.requireNonNull(choice, "form");
         return this;
     }
 
@@ -65,7 +65,7 @@ public final class LiveCascadeBuilder {
      * @return this
      */
     public LiveCascadeBuilder pace(Pace choice) {
-        pace = Objects.requireNonNull(choice, "choice");
+        pace = Objects.requireNonNull(choice, "pace");
         return this;
     }
 

@@ -1,10 +1,8 @@
 package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
-import io.github.polewright.Section;
 import io.github.polewright.retune.Glide;
 import io.github.polewright.retune.Pace;
-import java.util.Collections;
 import java.util.concurrent.atomic.AtomicReference;
 import java.util.function.Function;
 
@@ -19,11 +17,9 @@ final class Orders {
 
     private final AtomicReference<Order> slot;
     private final AtomicReference<Order> adopted;
-    private final Cascade silentSlots;
 
     Orders(Cascade start) {
-        silentSlots = Cascade.of(start.sampleRateHz(), Collections.nCopies(start.sectionCount(), Section.PASS_THROUGH));
-        Order first = new Order(0, Glide.between(start, start, Pace.FOLLOWING), 0, start, false, 1);
+        Order first = new Order(0, Glide.between(start, start, Pace.FOLLOWING), 0, false, 1);
         slot = new AtomicReference<>(first);
         adopted = new AtomicReference<>(first);
     }
@@ -73,15 +69,7 @@ final class Orders {
     }
 
     void bypass(boolean on) {
-        boolean isDone = false;
-        while (!isDone) {
-            Order before = latestAcquire();
-            isDone = before.bypassed() == on || slot.compareAndSet(before, before.bypassed(on, fade(before, on)));
-        }
-    }
-
-    private Glide fade(Order before, boolean on) {
-        return Glide.between(adopted.getAcquire().heading(), on ? silentSlots : before.wish(), Pace.SINGLE);
+        slot.updateAndGet(before -> before.bypassed(on));
     }
 
     void gain(double factor) {

@@ -59,7 +59,7 @@ final class Rehearsal {
         Section twoReal = Section.of(0.1, 0, 0, -0.9, 0.2);
         Section lowNotch = Section.of(1, -1.8, 1, -1.7, 0.9);
         Section highNotch = Section.of(1, 1.8, 1, 1.7, 0.9);
-        live.outputGain(-6);
+        live.outputGainDb(-6);
         live.retune(Cascade.of(1, resonant, lowNotch));
         live.process(block, 0, block, 0, 3);
         live.retune(Cascade.of(1, twoReal, highNotch));

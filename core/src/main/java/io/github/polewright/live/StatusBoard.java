@@ -13,8 +13,8 @@ final class StatusBoard {
     private final AtomicLong number = new AtomicLong();
 
     /** Audio thread. The number comes last: who sees it sees the figures of that order or of a later one. */
-    void writeRelease(Walk walk, int gainFramesLeft, long adopted, long orderNumber) {
-        framesLeft.setRelease(Math.max(walk.framesLeft(), gainFramesLeft));
+    void writeRelease(Walk walk, int fadeFramesLeft, long adopted, long orderNumber) {
+        framesLeft.setRelease(Math.max(walk.framesLeft(), fadeFramesLeft));
         framesHeld.setRelease(walk.framesHeld());
         highestLevel.setRelease(Double.doubleToRawLongBits(walk.highestLevel()));
         adoptions.setRelease(adopted);

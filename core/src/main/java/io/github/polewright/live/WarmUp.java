@@ -15,9 +15,9 @@ public record WarmUp(int blocks, double seconds, double firstBlockMicros, double
     /**
      * How many times faster the last blocks were than the first.
      *
-     * @return 1 for no gain
+     * @return 1 for no difference
      */
-    public double gain() {
+    public double timesFaster() {
         return firstBlockMicros / lastBlockMicros;
     }
 }

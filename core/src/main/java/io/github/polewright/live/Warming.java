@@ -106,7 +106,7 @@ final class Warming {
     /** Often enough that the way an order is taken up is compiled as well. */
     private void order(int number) {
         switch (number & 7) {
-            case 5 -> twin.outputGain(-number);
+            case 5 -> twin.outputGainDb(-number);
             case 6 -> twin.bypass(true);
             case 7 -> twin.bypass(false);
             default -> twin.retune(glides[number & 1]);

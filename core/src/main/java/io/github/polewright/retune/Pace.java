@@ -2,7 +2,8 @@ package io.github.polewright.retune;
 
 /**
  * How long a glide takes and how evenly. A glide is never shorter than its certificate allows; a pace only adds to
- * that.
+ * that. A narrow notch or bell that is replaced by one far away fades and must ring out first, at any pace: that takes
+ * about 4.4 s divided by its width in hertz, twice for one that is born as narrow. {@link Glide#totalFrames} tells.
  *
  * <p><b>Units</b> seconds. <b>Threads</b> immutable. The lengths were chosen for this project from the energy that a
  * glide puts beside a tone.

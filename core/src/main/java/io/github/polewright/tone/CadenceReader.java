@@ -2,6 +2,7 @@ package io.github.polewright.tone;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 
 /**
  * Finds call-progress signals: tones together, by frequency and cadence.
@@ -125,6 +126,7 @@ public final class CadenceReader {
      * @return whether there was one
      */
     public boolean poll(CadenceEvent event) {
+        Objects.requireNonNull(event, "event");
         int slot = ring.oldest();
         if (slot < 0) {
             return false;

@@ -5,6 +5,7 @@ import io.github.polewright.design.Cookbook;
 import io.github.polewright.design.HumNotch;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 
 /**
  * Reads tone pairs of push-button dialling: the sixteen symbols of ITU-T Q.23, with a receiver's duties after ITU-T
@@ -137,6 +138,7 @@ public final class PairReader {
      * @return whether there was one
      */
     public boolean poll(PairEvent event) {
+        Objects.requireNonNull(event, "event");
         int slot = ring.oldest();
         if (slot < 0) {
             return false;

@@ -2,6 +2,7 @@ package io.github.polewright.tone;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 import java.util.concurrent.atomic.AtomicLongArray;
 
 /**
@@ -125,6 +126,7 @@ public final class ToneMeter {
      * @return whether there was one
      */
     public boolean poll(ToneEvent event) {
+        Objects.requireNonNull(event, "event");
         int slot = ring.oldest();
         if (slot < 0) {
             return false;
@@ -210,7 +212,7 @@ public final class ToneMeter {
          * @return this
          */
         public Builder tone(Tone wanted) {
-            tones.add(wanted);
+            tones.add(Objects.requireNonNull(wanted, "tone"));
             return this;
         }
 

@@ -72,7 +72,7 @@ class SoakTest {
 
     private static void endsOnTheLastTarget(LiveCascade live, Form form) {
         Cascade last = Designs.mixed(99, SECTIONS);
-        live.outputGain(0);
+        live.outputGainDb(0);
         live.bypass(false);
         live.retune(last);
         Rig.settle(live);
@@ -107,7 +107,7 @@ class SoakTest {
                 live.bypass(random.nextBoolean());
             }
             if (random.nextInt(50) == 0) {
-                live.outputGain(10 * random.nextDouble() - 10);
+                live.outputGainDb(10 * random.nextDouble() - 10);
             }
             live.retuneStatus();
             orders.incrementAndGet();

@@ -34,6 +34,8 @@ final class ToneBytecodeTest {
             "java/lang/Math.sqrt",
             "java/lang/String.charAt",
             "java/util/Arrays.fill",
+            // The check of the one argument that draining has.
+            "java/util/Objects.requireNonNull",
             "java/util/concurrent/atomic/AtomicLong.getAcquire",
             "java/util/concurrent/atomic/AtomicLong.getPlain",
             "java/util/concurrent/atomic/AtomicLong.setRelease",

@@ -77,7 +77,7 @@ class WarmUpTest {
         assertEquals(20, warmUp.firstBlockMicros());
         // One reading a four blocks between the clock's two readings.
         assertEquals(5 / 4.0, warmUp.lastBlockMicros(), 1e-9);
-        assertEquals(16, warmUp.gain(), 1e-9);
+        assertEquals(16, warmUp.timesFaster(), 1e-9);
     }
 
     @ParameterizedTest

@@ -63,7 +63,9 @@ public final class CleaningText {
         }
         if (!found.isEmpty()) {
             lines.add("");
-            lines.add("Before and after are measured at the line; after is what the sound itself has there.");
+            lines.add(
+                    "Before and after are measured at the line; after is what the sound itself has there, less what the notch took of"
+                            + " it, and what is left of the hum.");
             lines.add("");
         }
         return lines;

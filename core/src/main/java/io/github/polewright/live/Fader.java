@@ -1,7 +1,10 @@
 package io.github.polewright.live;
 
-/** A gain behind the sections that moves along a smoothstep, 3u^2 - 2u^3, from wherever it is. The audio thread's own. */
-final class OutputGain {
+/**
+ * A factor that moves along a smoothstep, 3u^2 - 2u^3, from wherever it is: the gain behind the sections, and how much
+ * of them is heard. The audio thread's own.
+ */
+final class Fader {
 
     private final int glideFrames;
     private final double scale;
@@ -9,7 +12,8 @@ final class OutputGain {
     private double target = 1;
     private int passed;
 
-    OutputGain(int glideFrames) {
+    /** Rests at 1. */
+    Fader(int glideFrames) {
         this.glideFrames = glideFrames;
         this.scale = 1.0 / glideFrames;
         this.passed = glideFrames;
@@ -27,6 +31,11 @@ final class OutputGain {
         return glideFrames - passed;
     }
 
+    /** Whether it rests at 1, so that it changes nothing. */
+    boolean isIdle() {
+        return target == 1 && passed == glideFrames;
+    }
+
     /** Multiplies one channel's frames; {@link #advance} follows once for all channels. */
     void apply(double[] samples, int first, int frames) {
         if (passed == glideFrames) {
@@ -37,6 +46,16 @@ final class OutputGain {
         }
         for (int i = 0; i < frames; i++) {
             samples[first + i] *= at(Math.min(glideFrames, passed + 1 + i));
+        }
+    }
+
+    /** Mixes one channel's frames with the same frames of before: at 0 those, at 1 the samples; exactly at both ends. */
+    void blend(double[] before, double[] samples, int first, int frames) {
+        for (int i = 0; i < frames; i++) {
+            double share = at(Math.min(glideFrames, passed + 1 + i));
+            double dry = before[first + i];
+            samples[first + i] =
+                    share == 0 ? dry : share == 1 ? samples[first + i] : dry + share * (samples[first + i] - dry);
         }
     }
 

@@ -6,4 +6,5 @@ module io.github.polewright {
     requires static org.jspecify;
 
     exports io.github.polewright;
+    exports io.github.polewright.mains;
 }

@@ -1,0 +1,128 @@
+package io.github.polewright.mains;
+
+import java.util.Arrays;
+
+/** Scalar Kalman filters for the lines' complex amplitudes (derived for this project). */
+final class Amplitudes {
+
+    private static final double QUIET = 1e-30;
+    private static final double MEAN_SECONDS = 0.2;
+    /** Relative drift of a line's power a second. */
+    private static final double DRIFT = 1e-3;
+
+    private static final double LEAST_DRIFT = 0.02;
+    private static final double CHANGE_DRIFT = 0.02;
+    /** Six times what noise alone leaves in {@link #meanPower} of its own power. */
+    private static final double CHANGE_RATIO = 6 * 0.07;
+
+    private static final double LEAST_LEVEL = 0.4;
+    private static final double SURE = 4.5;
+
+    private final LineBank bank;
+    private final Innovation innovation;
+    private final double[] variance;
+    private final double[] meanRe;
+    private final double[] meanIm;
+    private final boolean[] changed;
+    private double lastLevel;
+    private boolean dropped;
+
+    Amplitudes(LineBank bank, Innovation innovation) {
+        this.bank = bank;
+        this.innovation = innovation;
+        variance = new double[bank.size()];
+        meanRe = new double[bank.size()];
+        meanIm = new double[bank.size()];
+        changed = new boolean[bank.size()];
+    }
+
+    void reset() {
+        Arrays.fill(variance, 0);
+        Arrays.fill(meanRe, 0);
+        Arrays.fill(meanIm, 0);
+        Arrays.fill(changed, false);
+        lastLevel = 0;
+    }
+
+    /** The first tick knows nothing yet: the innovation is the amplitude. */
+    void adoptFirst() {
+        for (int i = 0; i < bank.size(); i++) {
+            bank.re[i] += bank.newRe[i];
+            bank.im[i] += bank.newIm[i];
+            variance[i] = -1;
+        }
+    }
+
+    /** Takes a tick after the phase was moved by {@code radians} of the fundamental. */
+    void update(double radians, double seconds) {
+        double keep = Math.min(1, seconds / MEAN_SECONDS);
+        for (int k = 0; k < bank.lines; k++) {
+            double turn = (k + 1) * radians;
+            for (int i = k; i < bank.size(); i += bank.lines) {
+                meanRe[i] += keep * (bank.newRe[i] - meanRe[i]);
+                meanIm[i] += keep * (bank.newIm[i] - meanIm[i]);
+                move(i, turn, seconds);
+            }
+        }
+        followLevel();
+    }
+
+    private void move(int i, double turn, double seconds) {
+        double noise = innovation.worst[i];
+        if (noise <= 0) {
+            return;
+        }
+        double usual = innovation.noise[i];
+        double mean = meanPower(i);
+        changed[i] = mean > CHANGE_RATIO * usual;
+        double before = variance[i] < 0 ? usual : variance[i];
+        double drift = DRIFT * seconds * Math.max(bank.power(i), LEAST_DRIFT * usual);
+        double prior = before + drift + (changed[i] ? CHANGE_DRIFT * mean : 0);
+        double gain = prior / (prior + noise);
+        variance[i] = (1 - gain) * prior;
+        double re = bank.re[i];
+        double im = bank.im[i];
+        bank.re[i] = quiet(re + gain * (bank.newRe[i] + im * turn));
+        bank.im[i] = quiet(im + gain * (bank.newIm[i] - re * turn));
+    }
+
+    /** Where two ticks agree that the level of all lines has fallen, all fall at once. */
+    private void followLevel() {
+        double level = Math.max(-1, innovation.level());
+        double proof = level * level * 2 * innovation.levelInformation();
+        boolean low = level < -LEAST_LEVEL && proof > SURE;
+        dropped = low && lastLevel < 0;
+        if (dropped) {
+            double factor = 1 + Math.max(level, lastLevel);
+            for (int i = 0; i < bank.size(); i++) {
+                variance[i] += 0.25 * bank.power(i);
+                bank.re[i] *= factor;
+                bank.im[i] *= factor;
+            }
+        }
+        lastLevel = low && !dropped ? level : 0;
+    }
+
+    private static double quiet(double value) {
+        return Math.abs(value) < QUIET ? 0 : value;
+    }
+
+    /** Whether all lines fell at once at the last tick. */
+    boolean dropped() {
+        return dropped;
+    }
+
+    /** The power of the smoothed innovation: it leaves zero when a line changes. */
+    double meanPower(int i) {
+        return meanRe[i] * meanRe[i] + meanIm[i] * meanIm[i];
+    }
+
+    boolean changed(int i) {
+        return changed[i];
+    }
+
+    /** Error variance of a line's amplitude. */
+    double variance(int i) {
+        return Math.max(variance[i], 0);
+    }
+}

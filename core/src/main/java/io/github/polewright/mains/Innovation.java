@@ -1,0 +1,109 @@
+package io.github.polewright.mains;
+
+import java.util.Arrays;
+
+/**
+ * What all lines say together: the common phase error, the common level error, and how noisy each line is. Lines weigh
+ * by their Fisher information, so a line under the programme weighs little by itself (derived for this project).
+ */
+final class Innovation {
+
+    private static final double NOISE_SECONDS = 0.25;
+    private static final double MOST_FIRST_RADIANS = 0.5;
+    private static final double MOST_RADIANS = 0.6;
+
+    /** Innovation power a tick, smoothed, without the common phase error. */
+    final double[] noise;
+    /** The larger of {@link #noise} and the last innovation's power: instant attack, slow release. */
+    final double[] worst;
+
+    private final LineBank bank;
+    private final double[] offRe;
+    private final double[] offIm;
+    private double radians;
+    private double phaseInformation;
+    private double level;
+    private double levelInformation;
+
+    Innovation(LineBank bank) {
+        this.bank = bank;
+        noise = new double[bank.size()];
+        worst = new double[bank.size()];
+        offRe = new double[bank.size()];
+        offIm = new double[bank.size()];
+    }
+
+    void reset() {
+        Arrays.fill(noise, 0);
+        Arrays.fill(worst, 0);
+    }
+
+    /** Evaluates tick number {@code tick}, from 1. */
+    void evaluate(int tick, double seconds) {
+        phase(noise, MOST_FIRST_RADIANS);
+        double first = phaseInformation > 0 ? radians : 0;
+        double keep = Math.max(1.0 / tick, Math.min(1, seconds / NOISE_SECONDS));
+        double numerator = 0;
+        levelInformation = 0;
+        for (int k = 0; k < bank.lines; k++) {
+            double cosine = Math.cos((k + 1) * first);
+            double sine = -Math.sin((k + 1) * first);
+            for (int i = k; i < bank.size(); i += bank.lines) {
+                learn(i, cosine, sine, keep);
+                if (worst[i] > 0) {
+                    numerator += (offRe[i] * bank.re[i] + offIm[i] * bank.im[i]) / worst[i];
+                    levelInformation += bank.power(i) / worst[i];
+                }
+            }
+        }
+        level = levelInformation > 0 ? numerator / levelInformation : 0;
+        phase(worst, MOST_RADIANS);
+    }
+
+    private void learn(int i, double cosine, double sine, double keep) {
+        double fullRe = bank.re[i] + bank.newRe[i];
+        double fullIm = bank.im[i] + bank.newIm[i];
+        offRe[i] = fullRe * cosine - fullIm * sine - bank.re[i];
+        offIm[i] = fullRe * sine + fullIm * cosine - bank.im[i];
+        double power = offRe[i] * offRe[i] + offIm[i] * offIm[i];
+        noise[i] += keep * (power - noise[i]);
+        worst[i] = Math.max(noise[i], power);
+    }
+
+    private void phase(double[] weights, double most) {
+        double numerator = 0;
+        phaseInformation = 0;
+        for (int k = 0; k < bank.lines; k++) {
+            double order = k + 1;
+            for (int i = k; i < bank.size(); i += bank.lines) {
+                if (weights[i] > 0) {
+                    double cross = bank.newIm[i] * bank.re[i] - bank.newRe[i] * bank.im[i];
+                    numerator += order * cross / weights[i];
+                    phaseInformation += order * order * bank.power(i) / weights[i];
+                }
+            }
+        }
+        double raw = phaseInformation > 0 ? numerator / phaseInformation : 0;
+        radians = Math.max(-most, Math.min(most, raw));
+    }
+
+    /** Common phase error of the fundamental. */
+    double radians() {
+        return radians;
+    }
+
+    /** One over twice the variance of {@link #radians}. */
+    double phaseInformation() {
+        return phaseInformation;
+    }
+
+    /** Common relative level error: -1 where the hum has stopped, 0 where it is as known. */
+    double level() {
+        return level;
+    }
+
+    /** One over twice the variance of {@link #level}. */
+    double levelInformation() {
+        return levelInformation;
+    }
+}

@@ -1,0 +1,155 @@
+package io.github.polewright.mains;
+
+/** Decides whether the followed lines are mains hum: nothing is removed before. Derived for this project. */
+final class Proof {
+
+    private static final double SLOW_PROOF_SECONDS = 10;
+    private static final double QUICK_SECONDS = 0.08;
+    private static final double FAIL_SECONDS = 1.5;
+    private static final double STEADY_FACTOR = 1.6;
+    private static final double NOTE_CENTS = 10;
+    private static final double EXACT_NOTE_CENTS = 4;
+    private static final double NEAR_NOTE_SECONDS = 2;
+    private static final double MOVED_HZ = 0.04;
+    private static final double MEMORY_SECONDS = 60;
+    private static final double RECENT_TRIAL_SECONDS = 0.4;
+    private static final double STRIKE_FADE = 0.15;
+    private static final double MOST_STRIKES = 2.5;
+    private static final double GONE_SHARE = 0.7;
+    private static final double GONE_SECONDS = 0.5;
+    private static final double LOWEST_HZ = 44.5;
+    private static final double HIGHEST_HZ = 65.5;
+
+    static final boolean DEBUG = Boolean.getBoolean("debug");
+    private final Presence presence;
+    private MainsState state = MainsState.SEARCHING;
+    private double trialSeconds;
+    private double proofSeconds;
+    private double failSeconds;
+    private double goneSeconds;
+    private double steadyPower;
+    private double lowestHz;
+    private double highestHz;
+    private double strikes;
+    private double sinceProof = MEMORY_SECONDS;
+    private boolean jumped;
+    private boolean matched;
+
+    Proof(Presence presence) {
+        this.presence = presence;
+    }
+
+    void reset() {
+        state = MainsState.SEARCHING;
+        sinceProof = MEMORY_SECONDS;
+    }
+
+    MainsState state() {
+        return state;
+    }
+
+    /** Whether lines may be removed. */
+    boolean holds() {
+        return state == MainsState.FOLLOWING || state == MainsState.HOLDING;
+    }
+
+    void begin(double frequencyHz) {
+        state = MainsState.PROVING;
+        trialSeconds = 0;
+        proofSeconds = 0;
+        failSeconds = 0;
+        goneSeconds = 0;
+        steadyPower = 0;
+        strikes = 0;
+        jumped = false;
+        matched = false;
+        lowestHz = frequencyHz;
+        highestHz = frequencyHz;
+    }
+
+    /** The first second held the lines as they are now. */
+    void match(boolean matches) {
+        matched = matches;
+    }
+
+    /** A trial that has not had its quick proof can be replaced. */
+    boolean isSlow() {
+        return state == MainsState.PROVING && trialSeconds > 1;
+    }
+
+    void searchSeconds(double seconds) {
+        sinceProof = Math.min(MEMORY_SECONDS, sinceProof + seconds);
+    }
+
+    /** A tick of silence: a trial fails in it, what is proven is kept. */
+    void silence(double seconds) {
+        sinceProof = Math.min(MEMORY_SECONDS, sinceProof + seconds);
+        if (state == MainsState.PROVING || sinceProof >= MEMORY_SECONDS) {
+            state = MainsState.SEARCHING;
+        } else {
+            state = MainsState.HOLDING;
+        }
+    }
+
+    void tick(double seconds, double frequencyHz, boolean jump) {
+        if (!(frequencyHz >= LOWEST_HZ && frequencyHz <= HIGHEST_HZ)) {
+            state = MainsState.SEARCHING;
+        } else if (state == MainsState.PROVING) {
+            proving(seconds, frequencyHz, jump);
+        } else {
+            following(seconds, jump, frequencyHz);
+        }
+    }
+
+    private void proving(double seconds, double frequencyHz, boolean jump) {
+        searchSeconds(seconds);
+        trialSeconds += seconds;
+        lowestHz = Math.min(lowestHz, frequencyHz);
+        highestHz = Math.max(highestHz, frequencyHz);
+        int lines = presence.clearLines();
+        failSeconds = lines >= 2 ? 0 : failSeconds + seconds;
+        if (failSeconds > FAIL_SECONDS) {
+            state = MainsState.SEARCHING;
+            return;
+        }
+        double power = presence.clearPower();
+        if (DEBUG && (int)(trialSeconds*50)%10==0) System.out.printf("  t %.2f f %.3f lines %d jump %b matched %b proof %.2f cents %.1f%n", trialSeconds, frequencyHz, lines, jumped, matched, proofSeconds, TemperedNotes.centsAway(frequencyHz));
+        boolean steady = power < steadyPower * STEADY_FACTOR && power * STEADY_FACTOR > steadyPower;
+        jumped |= jump;
+        if (lines < 2 || jump || !steady) {
+            proofSeconds = 0;
+            steadyPower = power;
+        }
+        proofSeconds += seconds;
+        if (proofSeconds >= SLOW_PROOF_SECONDS || lines >= 3 && quick(frequencyHz)) {
+            state = MainsState.FOLLOWING;
+            sinceProof = 0;
+        }
+    }
+
+    private boolean quick(double frequencyHz) {
+        double cents = TemperedNotes.centsAway(frequencyHz);
+        boolean moved = highestHz - lowestHz > MOVED_HZ || cents > EXACT_NOTE_CENTS;
+        boolean noNote = cents > NOTE_CENTS || moved && proofSeconds > NEAR_NOTE_SECONDS;
+        if (jumped || !noNote || trialSeconds < QUICK_SECONDS) {
+            return false;
+        }
+        return matched || sinceProof < MEMORY_SECONDS && trialSeconds > RECENT_TRIAL_SECONDS;
+    }
+
+    private void following(double seconds, boolean jump, double frequencyHz) {
+        sinceProof = 0;
+        strikes = Math.max(0, strikes - STRIKE_FADE * seconds) + (jump ? 1 : 0);
+        goneSeconds = presence.goneShare() >= GONE_SHARE ? goneSeconds + seconds : 0;
+        if (goneSeconds >= GONE_SECONDS) {
+            state = MainsState.SEARCHING;
+        } else if (strikes > MOST_STRIKES) {
+            if (DEBUG) System.out.println("  strikes out");
+            begin(frequencyHz);
+            jumped = true;
+            sinceProof = MEMORY_SECONDS;
+        } else {
+            state = presence.anyOpen() ? MainsState.FOLLOWING : MainsState.HOLDING;
+        }
+    }
+}

@@ -25,7 +25,7 @@ final class Amplitudes {
     private final double[] meanIm;
     private final boolean[] changed;
     private double lastLevel;
-    private boolean dropped;
+    private boolean stepped;
 
     Amplitudes(LineBank bank, Innovation innovation) {
         this.bank = bank;
@@ -42,6 +42,7 @@ final class Amplitudes {
         Arrays.fill(meanIm, 0);
         Arrays.fill(changed, false);
         lastLevel = 0;
+        stepped = false;
     }
 
     /** The first tick knows nothing yet: the innovation is the amplitude. */
@@ -54,7 +55,7 @@ final class Amplitudes {
     }
 
     /** Takes a tick after the phase was moved by {@code radians} of the fundamental. */
-    void update(double radians, double seconds) {
+    void update(double radians, double seconds, boolean phaseSettled) {
         double keep = Math.min(1, seconds / MEAN_SECONDS);
         for (int k = 0; k < bank.lines; k++) {
             double turn = (k + 1) * radians;
@@ -64,7 +65,7 @@ final class Amplitudes {
                 move(i, turn, seconds);
             }
         }
-        followLevel();
+        followLevel(phaseSettled);
     }
 
     private void move(int i, double turn, double seconds) {
@@ -86,30 +87,35 @@ final class Amplitudes {
         bank.im[i] = quiet(im + gain * (bank.newIm[i] - re * turn));
     }
 
-    /** Where two ticks agree that the level of all lines has fallen, all fall at once. */
-    private void followLevel() {
-        double level = Math.max(-1, innovation.level());
+    /**
+     * Where two ticks agree that all lines rose or fell together, all follow at once. Not while the phase runs away from
+     * the loop: that looks like a fall.
+     */
+    private void followLevel(boolean phaseSettled) {
+        double level = Math.max(-1, Math.min(1, innovation.level()));
         double proof = level * level * 2 * innovation.levelInformation();
-        boolean low = level < -LEAST_LEVEL && proof > SURE;
-        dropped = low && lastLevel < 0;
-        if (dropped) {
-            double factor = 1 + Math.max(level, lastLevel);
+        double now = phaseSettled && Math.abs(level) > LEAST_LEVEL && proof > SURE ? level : 0;
+        stepped = now * lastLevel > 0;
+        if (stepped) {
+            double step = Math.abs(now) < Math.abs(lastLevel) ? now : lastLevel;
             for (int i = 0; i < bank.size(); i++) {
                 variance[i] += 0.25 * bank.power(i);
-                bank.re[i] *= factor;
-                bank.im[i] *= factor;
+                bank.re[i] *= 1 + step;
+                bank.im[i] *= 1 + step;
+                meanRe[i] = 0;
+                meanIm[i] = 0;
             }
         }
-        lastLevel = low && !dropped ? level : 0;
+        lastLevel = stepped ? 0 : now;
     }
 
     private static double quiet(double value) {
         return Math.abs(value) < QUIET ? 0 : value;
     }
 
-    /** Whether all lines fell at once at the last tick. */
-    boolean dropped() {
-        return dropped;
+    /** Whether all lines rose or fell at once at the last tick. */
+    boolean stepped() {
+        return stepped;
     }
 
     /** The power of the smoothed innovation: it leaves zero when a line changes. */

@@ -11,6 +11,8 @@ final class FrequencyLoop {
     private static final double RISE_SECONDS = 0.08;
     private static final double FALL_SECONDS = 0.4;
 
+    private static final double SETTLED = Double.parseDouble(System.getProperty("settled","4"));
+
     private double frequencyHz;
     private double phaseVariance;
     private double cross;
@@ -61,6 +63,11 @@ final class FrequencyLoop {
         double square = agreement * agreement * 2 * AGREE_SECONDS / seconds;
         double pace = square > excess ? RISE_SECONDS : FALL_SECONDS;
         excess += Math.min(1, seconds / pace) * (square - excess);
+    }
+
+    /** Whether phase errors do not agree with each other: the frequency does not run. */
+    boolean isSettled() {
+        return excess < SETTLED;
     }
 
     double frequencyHz() {

@@ -9,7 +9,7 @@ final class LinePlan {
      * A share of the width that balances a notch's loss of programme against the residue of a constant frequency error
      * as large as the uncertainty; the error is not constant, and a tenth was found better (derived for this project).
      */
-    private static final double SHARE = Double.parseDouble(System.getProperty("share","0.001"));
+    private static final double SHARE = Double.parseDouble(System.getProperty("share", "0.001"));
 
     private static final double WIDTH_PACE = 0.3;
     private static final double DROP = 0.3;

@@ -14,7 +14,7 @@ final class Presence {
     private static final double VARIANCE_MARGIN = 1.5;
     private static final double SEEN = 12;
     private static final double UNSEEN = 4;
-    private static final double KNOWN = Double.parseDouble(System.getProperty("known","16"));
+    private static final double KNOWN = Double.parseDouble(System.getProperty("known", "9"));
     private static final double LEAST_SHARE = 0.12;
 
     /** Smoothed squared spread of the amplitude a tick: the programme. */
@@ -89,7 +89,8 @@ final class Presence {
         re[i] += keep * stepRe;
         im[i] += keep * stepIm;
         if (ticks > 1) {
-            spread[i] += Math.max(1.0 / (ticks - 1), Math.min(keep, 1)) * (stepRe * stepRe + stepIm * stepIm - spread[i]);
+            spread[i] +=
+                    Math.max(1.0 / (ticks - 1), Math.min(keep, 1)) * (stepRe * stepRe + stepIm * stepIm - spread[i]);
         }
     }
 
@@ -100,7 +101,8 @@ final class Presence {
         boolean wouldShow = UNSEEN * variance < remembered[i] / 4;
         goneSeconds[i] = missing && wouldShow ? goneSeconds[i] + seconds : 0;
         open[i] = ticks > 4 && power > SEEN * variance && power > 0;
-        clear[i] = open[i] || ticks > 4 && goneSeconds[i] == 0 && known > KNOWN * amplitudes.variance(i) && known > 0;
+        boolean learnt = ticks > 4 && goneSeconds[i] == 0 && known > KNOWN * amplitudes.variance(i) && known > 0;
+        clear[i] = open[i] || learnt;
         if (clear[i]) {
             double keep = remembered[i] > 0 ? Math.min(1, seconds / REMEMBER_SECONDS) : 1;
             remembered[i] += keep * (known - remembered[i]);

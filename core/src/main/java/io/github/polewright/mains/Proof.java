@@ -10,10 +10,15 @@ final class Proof {
     private static final double NOTE_CENTS = 10;
     private static final double EXACT_NOTE_CENTS = 4;
     private static final double NEAR_NOTE_SECONDS = 2;
+    private static final double SETTLE_SECONDS = 1;
     private static final double MOVED_HZ = 0.04;
     private static final double MEMORY_SECONDS = 60;
     private static final double RECENT_TRIAL_SECONDS = 0.4;
-    private static final double STRIKE_FADE = 0.15;
+    private static final double STRIKE = 1.5;
+    private static final double STRIKE_FADE = 0.1;
+    /** Jumps closer than this are one. */
+    private static final double JUMP_SECONDS = 0.3;
+
     private static final double MOST_STRIKES = 2.5;
     private static final double GONE_SHARE = 0.7;
     private static final double GONE_SECONDS = 0.5;
@@ -32,6 +37,8 @@ final class Proof {
     private double highestHz;
     private double strikes;
     private double sinceProof = MEMORY_SECONDS;
+    private double sinceJump;
+    private boolean jumping;
     private boolean jumped;
     private boolean matched;
 
@@ -104,8 +111,9 @@ final class Proof {
     private void proving(double seconds, double frequencyHz, boolean jump) {
         searchSeconds(seconds);
         trialSeconds += seconds;
-        lowestHz = Math.min(lowestHz, frequencyHz);
-        highestHz = Math.max(highestHz, frequencyHz);
+        boolean settling = trialSeconds < SETTLE_SECONDS;
+        lowestHz = settling ? frequencyHz : Math.min(lowestHz, frequencyHz);
+        highestHz = settling ? frequencyHz : Math.max(highestHz, frequencyHz);
         int lines = presence.clearLines();
         failSeconds = lines >= 2 ? 0 : failSeconds + seconds;
         if (failSeconds > FAIL_SECONDS) {
@@ -113,7 +121,16 @@ final class Proof {
             return;
         }
         double power = presence.clearPower();
-        if (DEBUG && (int)(trialSeconds*50)%10==0) System.out.printf("  t %.2f f %.3f lines %d jump %b matched %b proof %.2f cents %.1f%n", trialSeconds, frequencyHz, lines, jumped, matched, proofSeconds, TemperedNotes.centsAway(frequencyHz));
+        if (DEBUG && (int) (trialSeconds * 50) % 10 == 0)
+            System.out.printf(
+                    "  t %.2f f %.3f lines %d jump %b matched %b proof %.2f cents %.1f%n",
+                    trialSeconds,
+                    frequencyHz,
+                    lines,
+                    jumped,
+                    matched,
+                    proofSeconds,
+                    TemperedNotes.centsAway(frequencyHz));
         boolean steady = power < steadyPower * STEADY_FACTOR && power * STEADY_FACTOR > steadyPower;
         jumped |= jump;
         if (lines < 2 || jump || !steady) {
@@ -139,7 +156,10 @@ final class Proof {
 
     private void following(double seconds, boolean jump, double frequencyHz) {
         sinceProof = 0;
-        strikes = Math.max(0, strikes - STRIKE_FADE * seconds) + (jump ? 1 : 0);
+        sinceJump = jump ? 0 : sinceJump + seconds;
+        boolean strike = jump && !jumping;
+        jumping = sinceJump < JUMP_SECONDS;
+        strikes = Math.max(0, strikes - STRIKE_FADE * seconds) + (strike ? STRIKE : 0);
         goneSeconds = presence.goneShare() >= GONE_SHARE ? goneSeconds + seconds : 0;
         if (goneSeconds >= GONE_SECONDS) {
             state = MainsState.SEARCHING;

@@ -8,6 +8,8 @@ final class Recent {
     static final int LENGTH = Transform.POINTS;
 
     private static final double AUDIBLE = 1e-9;
+    /** A quarter of a second of silence at most before the first sound. */
+    private static final int LATEST = 250;
 
     final int channels;
     /** The first second of sound, {@code [channel][sample]}. */
@@ -17,6 +19,7 @@ final class Recent {
     private int next;
     private int filled;
     private int firstCount;
+    private int quietCount;
     private boolean sounding;
 
     Recent(int channels) {
@@ -30,7 +33,9 @@ final class Recent {
             ring[c][next] = samples[c];
             sounding |= Math.abs(samples[c]) > AUDIBLE;
         }
-        if (sounding && firstCount < LENGTH) {
+        if (!sounding) {
+            quietCount = Math.min(quietCount + 1, LATEST);
+        } else if (firstCount < LENGTH) {
             for (int c = 0; c < channels; c++) {
                 first[c][firstCount] = samples[c];
             }
@@ -45,8 +50,9 @@ final class Recent {
         return filled;
     }
 
+    /** False for ever where sound began late: what begins after silence may be a note. */
     boolean firstIsWhole() {
-        return firstCount == LENGTH;
+        return firstCount == LENGTH && quietCount < LATEST;
     }
 
     /** Sample {@code index} of the last {@code length}, oldest first. */
@@ -66,6 +72,7 @@ final class Recent {
         next = 0;
         filled = 0;
         firstCount = 0;
+        quietCount = 0;
         sounding = false;
     }
 }

@@ -76,10 +76,8 @@ final class Refinement {
             }
             if (later) {
                 numerator += harmonic * (sumImaginary * real[c] - sumReal * imaginary[c]);
-                denominator += harmonic
-                        * harmonic
-                        * Math.hypot(real[c], imaginary[c])
-                        * Math.hypot(sumReal, sumImaginary);
+                denominator +=
+                        harmonic * harmonic * Math.hypot(real[c], imaginary[c]) * Math.hypot(sumReal, sumImaginary);
             }
             real[c] = sumReal;
             imaginary[c] = sumImaginary;

@@ -98,7 +98,7 @@ final class RemovalEngine {
         }
         phasors.place();
         plan.choose(on, way);
-        if (news && tracker.amplitudes.dropped()) {
+        if (news && tracker.amplitudes.stepped()) {
             notches.adoptOpen();
         }
         subtraction.prepare(plan.subtracted);

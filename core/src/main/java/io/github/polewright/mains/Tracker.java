@@ -191,7 +191,7 @@ final class Tracker {
         innovation.evaluate(ticks - 1, tickSeconds);
         moved = loop.correct(innovation.radians(), innovation.phaseInformation(), tickSeconds);
         phase += moved;
-        amplitudes.update(moved, tickSeconds);
+        amplitudes.update(moved, tickSeconds, loop.isSettled());
         presence.update(moved, tickSeconds);
         proof.tick(tickSeconds, loop.frequencyHz(), jumped());
         if (proof.state() == MainsState.PROVING && firstSecond.isIdle() && recent.firstIsWhole() && --untilMatch <= 0) {

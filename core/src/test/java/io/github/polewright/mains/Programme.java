@@ -117,14 +117,7 @@ final class Programme {
 
     /** One note of falling partials; {@code decay} in nepers a second, with 10 ms of attack and release. */
     static void note(
-            double[] out,
-            double rate,
-            double at,
-            double length,
-            double hz,
-            int partials,
-            double decay,
-            Random random) {
+            double[] out, double rate, double at, double length, double hz, int partials, double decay, Random random) {
         int from = (int) (at * rate);
         int count = (int) (length * rate);
         double level = 0.1 + 0.1 * random.nextDouble();

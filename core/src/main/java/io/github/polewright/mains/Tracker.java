@@ -130,11 +130,15 @@ final class Tracker {
         }
     }
 
+    /** Whether a candidate may take the place of a trial without proof, or of a frequency that no line bears out. */
     private boolean isRival(double frequencyHz) {
+        double away = Math.abs(frequencyHz - loop.frequencyHz());
+        if (proof.state() == MainsState.HOLDING && !isSilent()) {
+            return away > NEAR_RIVAL_HZ;
+        }
         if (!proof.isSlow() || TemperedNotes.centsAway(frequencyHz) < NOTE_CENTS) {
             return false;
         }
-        double away = Math.abs(frequencyHz - loop.frequencyHz());
         return away > RIVAL_HZ || away > NEAR_RIVAL_HZ && presence.clearLines() < 3;
     }
 

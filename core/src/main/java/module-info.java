@@ -7,4 +7,8 @@ module io.github.polewright {
 
     exports io.github.polewright;
     exports io.github.polewright.mains;
+    exports io.github.polewright.pcm;
+    exports io.github.polewright.design;
+    exports io.github.polewright.live;
+    exports io.github.polewright.inspect;
 }

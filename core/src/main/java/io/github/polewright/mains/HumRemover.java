@@ -1,5 +1,6 @@
 package io.github.polewright.mains;
 
+import io.github.polewright.slab.Ranges;
 import java.util.Objects;
 
 /**
@@ -65,7 +66,7 @@ public final class HumRemover {
 
         private Builder(double sampleRateHz, int channels) {
             this.sampleRateHz = Rates.of(sampleRateHz).sampleRateHz;
-            this.channels = Blocks.channels(channels);
+            this.channels = Limits.channels(channels);
         }
 
         /**
@@ -76,7 +77,7 @@ public final class HumRemover {
          * @throws IllegalArgumentException if {@code count} is out of its range
          */
         public Builder lines(int count) {
-            lines = Blocks.lines(count);
+            lines = Limits.lines(count);
             return this;
         }
 
@@ -110,17 +111,17 @@ public final class HumRemover {
      * @param destinationOffset index of its first sample
      * @param frames how many frames
      * @throws IndexOutOfBoundsException if the frames do not lie in an array
-     * @throws IllegalArgumentException if the two ranges overlap without being the same
+     * @throws IllegalArgumentException if {@code frames < 0} or the two ranges overlap without being the same
      */
     public void process(float[] source, int sourceOffset, float[] destination, int destinationOffset, int frames) {
-        Blocks.range(sourceOffset, frames, channels, source.length);
-        Blocks.range(destinationOffset, frames, channels, destination.length);
-        Blocks.overlap(source, sourceOffset, destination, destinationOffset, (long) frames * channels);
+        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = engine.slab.room(frames - done);
+            int count = engine.room(frames - done);
             engine.slab.load(source, sourceOffset + done * channels, count);
             engine.filter(count);
-            engine.store(destination, destinationOffset + done * channels, count);
+            engine.slab.store(destination, destinationOffset + done * channels, count);
             engine.advance(count);
             done += count;
         }
@@ -135,17 +136,17 @@ public final class HumRemover {
      * @param destinationOffset index of its first sample
      * @param frames how many frames
      * @throws IndexOutOfBoundsException if the frames do not lie in an array
-     * @throws IllegalArgumentException if the two ranges overlap without being the same
+     * @throws IllegalArgumentException if {@code frames < 0} or the two ranges overlap without being the same
      */
     public void process(double[] source, int sourceOffset, double[] destination, int destinationOffset, int frames) {
-        Blocks.range(sourceOffset, frames, channels, source.length);
-        Blocks.range(destinationOffset, frames, channels, destination.length);
-        Blocks.overlap(source, sourceOffset, destination, destinationOffset, (long) frames * channels);
+        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = engine.slab.room(frames - done);
+            int count = engine.room(frames - done);
             engine.slab.load(source, sourceOffset + done * channels, count);
             engine.filter(count);
-            engine.store(destination, destinationOffset + done * channels, count);
+            engine.slab.store(destination, destinationOffset + done * channels, count);
             engine.advance(count);
             done += count;
         }
@@ -158,17 +159,17 @@ public final class HumRemover {
      * @param destination one array a channel
      * @param offset index of the first frame in source and destination
      * @param frames how many frames
-     * @throws IllegalArgumentException if an argument has another number of channels
+     * @throws IllegalArgumentException if {@code frames < 0}, an argument has another number of channels, or one array
+     *     serves two channels
      * @throws IndexOutOfBoundsException if the frames do not lie in every array
      */
     public void process(float[][] source, float[][] destination, int offset, int frames) {
-        Blocks.planar(source, channels, offset, frames);
-        Blocks.planar(destination, channels, offset, frames);
+        Ranges.planar(source, destination, offset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = engine.slab.room(frames - done);
+            int count = engine.room(frames - done);
             engine.slab.load(source, offset + done, count);
             engine.filter(count);
-            engine.store(destination, offset + done, count);
+            engine.slab.store(destination, offset + done, count);
             engine.advance(count);
             done += count;
         }
@@ -208,12 +209,12 @@ public final class HumRemover {
     }
 
     /**
-     * How many non-finite samples were replaced by silence. Any thread.
+     * How many non-finite samples, coming or going, were replaced by silence. Any thread; up to a slab late.
      *
      * @return a count since construction
      */
     public long replacedSamples() {
-        return engine.replaced;
+        return engine.replacedInputs + engine.replacedOutputs;
     }
 
     /**

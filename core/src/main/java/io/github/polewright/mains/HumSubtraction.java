@@ -112,13 +112,14 @@ final class HumSubtraction {
         }
     }
 
-    void run(int channel, double[] data, int from, int to) {
+    /** Filters frames in place; the first of them is frame {@code from} of the slab. */
+    void run(int channel, double[] data, int offset, int from, int count) {
         if (idle) {
             return;
         }
         double[] h = hum[channel];
-        for (int n = from; n < to; n++) {
-            data[n] -= h[n];
+        for (int n = 0; n < count; n++) {
+            data[offset + n] -= h[from + n];
         }
     }
 }

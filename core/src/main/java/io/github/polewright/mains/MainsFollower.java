@@ -1,5 +1,8 @@
 package io.github.polewright.mains;
 
+import io.github.polewright.slab.Ranges;
+import io.github.polewright.slab.Slab;
+
 /**
  * Finds the mains frequency in the hum of a stream and follows it: from all usable harmonics together, in all channels
  * together (so that hum in opposite phase counts too), wherever the fundamental lies from 45 to 65 Hz. It changes no
@@ -17,15 +20,17 @@ public final class MainsFollower {
 
     private final int channels;
     private final Slab slab;
+    private final SlabInput input;
     private final Tracker tracker;
     private final LinePhasors phasors;
     private final ReadingSlot slot;
 
     private MainsFollower(double sampleRateHz, int channels, int lines) {
         Rates rates = Rates.of(sampleRateHz);
-        this.channels = Blocks.channels(channels);
-        slab = new Slab(rates, channels);
-        tracker = new Tracker(rates, channels, Blocks.lines(lines));
+        this.channels = Limits.channels(channels);
+        slab = new Slab(channels);
+        input = new SlabInput(rates, channels);
+        tracker = new Tracker(rates, channels, Limits.lines(lines));
         phasors = new LinePhasors(tracker);
         slot = new ReadingSlot(tracker, phasors);
     }
@@ -61,12 +66,13 @@ public final class MainsFollower {
      * @param source samples, finite or not, channel after channel
      * @param offset index of the first sample
      * @param frames how many frames
+     * @throws IllegalArgumentException if {@code frames < 0}
      * @throws IndexOutOfBoundsException if the frames do not lie in the array
      */
     public void follow(float[] source, int offset, int frames) {
-        Blocks.range(offset, frames, channels, source.length);
+        Ranges.interleaved("source", source.length, offset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = slab.room(frames - done);
+            int count = input.room(frames - done);
             slab.load(source, offset + done * channels, count);
             advance(count);
             done += count;
@@ -79,12 +85,13 @@ public final class MainsFollower {
      * @param source samples, finite or not, channel after channel
      * @param offset index of the first sample
      * @param frames how many frames
+     * @throws IllegalArgumentException if {@code frames < 0}
      * @throws IndexOutOfBoundsException if the frames do not lie in the array
      */
     public void follow(double[] source, int offset, int frames) {
-        Blocks.range(offset, frames, channels, source.length);
+        Ranges.interleaved("source", source.length, offset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = slab.room(frames - done);
+            int count = input.room(frames - done);
             slab.load(source, offset + done * channels, count);
             advance(count);
             done += count;
@@ -97,13 +104,13 @@ public final class MainsFollower {
      * @param source one array a channel
      * @param offset index of the first frame
      * @param frames how many frames
-     * @throws IllegalArgumentException if {@code source} has another number of channels
+     * @throws IllegalArgumentException if {@code frames < 0} or {@code source} has another number of channels
      * @throws IndexOutOfBoundsException if the frames do not lie in every array
      */
     public void follow(float[][] source, int offset, int frames) {
-        Blocks.planar(source, channels, offset, frames);
+        Ranges.planar(source, source, offset, frames, channels);
         for (int done = 0; done < frames; ) {
-            int count = slab.room(frames - done);
+            int count = input.room(frames - done);
             slab.load(source, offset + done, count);
             advance(count);
             done += count;
@@ -111,9 +118,10 @@ public final class MainsFollower {
     }
 
     private void advance(int count) {
-        if (slab.advance(count)) {
+        input.take(slab.samples(), count);
+        if (input.advance(count)) {
             MainsState before = tracker.proof.state();
-            tracker.slab(slab.data);
+            tracker.slab(input.data);
             if (tracker.ticked() || before != tracker.proof.state()) {
                 phasors.retune();
                 slot.publish();
@@ -132,7 +140,7 @@ public final class MainsFollower {
 
     /** Forgets everything and searches anew. Audio thread only. */
     public void reset() {
-        slab.reset();
+        input.reset();
         tracker.reset();
         slot.publish();
     }

@@ -130,29 +130,29 @@ final class NotchBank {
         }
     }
 
-    /** Filters frames of the slab in place; {@code from} is 0 at the slab's start. */
-    void run(int channel, double[] data, int from, int to) {
+    /** Filters frames in place; the first of them is frame {@code from} of the slab. */
+    void run(int channel, double[] data, int offset, int from, int count) {
         for (int k = 0; k < lines; k++) {
             int i = channel * lines + k;
             if (half[i] > 0 || halfTurn[i] > 0) {
-                section(i, k, data, from, to);
+                section(i, k, data, offset, from, count);
             }
         }
     }
 
-    private void section(int i, int k, double[] data, int from, int to) {
+    private void section(int i, int k, double[] data, int offset, int from, int count) {
         double sine = phasors.turnIm[k];
         double cosine = phasors.turnRe[k];
         double s = s2[i];
         double c = c2[i];
         double turn = halfTurn[i];
-        double start = half[i];
+        double mix = half[i] + halfTurn[i] * from;
         double a = x1[i];
         double b = x2[i];
-        for (int n = from; n < to; n++) {
+        for (int n = offset; n < offset + count; n++) {
             double u = data[n];
             double f = c * u - s * b;
-            data[n] = u + (start + turn * n) * (s * u + c * b - u);
+            data[n] = u + (mix + turn * (n - offset)) * (s * u + c * b - u);
             double next = sine * f + cosine * a;
             b = sine * a - cosine * f;
             a = next;

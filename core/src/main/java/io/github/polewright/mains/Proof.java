@@ -25,7 +25,6 @@ final class Proof {
     private static final double LOWEST_HZ = 44.5;
     private static final double HIGHEST_HZ = 65.5;
 
-    static final boolean DEBUG = Boolean.getBoolean("debug");
     private final Presence presence;
     private MainsState state = MainsState.SEARCHING;
     private double trialSeconds;
@@ -121,16 +120,6 @@ final class Proof {
             return;
         }
         double power = presence.clearPower();
-        if (DEBUG && (int) (trialSeconds * 50) % 10 == 0)
-            System.out.printf(
-                    "  t %.2f f %.3f lines %d jump %b matched %b proof %.2f cents %.1f%n",
-                    trialSeconds,
-                    frequencyHz,
-                    lines,
-                    jumped,
-                    matched,
-                    proofSeconds,
-                    TemperedNotes.centsAway(frequencyHz));
         boolean steady = power < steadyPower * STEADY_FACTOR && power * STEADY_FACTOR > steadyPower;
         jumped |= jump;
         if (lines < 2 || jump || !steady) {
@@ -164,7 +153,6 @@ final class Proof {
         if (goneSeconds >= GONE_SECONDS) {
             state = MainsState.SEARCHING;
         } else if (strikes > MOST_STRIKES) {
-            if (DEBUG) System.out.println("  strikes out");
             begin(frequencyHz);
             jumped = true;
             sinceProof = MEMORY_SECONDS;

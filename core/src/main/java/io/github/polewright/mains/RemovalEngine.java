@@ -1,5 +1,7 @@
 package io.github.polewright.mains;
 
+import io.github.polewright.slab.Slab;
+
 /** One slab after the other: remove with what is known, then look at the slab, then plan the next one. */
 final class RemovalEngine {
 
@@ -9,31 +11,32 @@ final class RemovalEngine {
     final ReadingSlot slot;
     volatile boolean on = true;
     volatile Removal way = Removal.SUBTRACTION;
-    volatile long replaced;
+    volatile long replacedInputs;
+    volatile long replacedOutputs;
     volatile long restarted;
 
+    private final SlabInput input;
     private final Tracker tracker;
     private final LinePhasors phasors;
     private final HumSubtraction subtraction;
     private final NotchBank notches;
     private final LinePlan plan;
-    private final double[][] output;
     private final int channels;
 
     RemovalEngine(Rates rates, int channels, int lines) {
         this.channels = channels;
-        slab = new Slab(rates, channels);
+        slab = new Slab(channels);
+        input = new SlabInput(rates, channels);
         tracker = new Tracker(rates, channels, lines);
         phasors = new LinePhasors(tracker);
         slot = new ReadingSlot(tracker, phasors);
         subtraction = new HumSubtraction(tracker, phasors, RAMP_SECONDS);
         notches = new NotchBank(tracker, phasors, RAMP_SECONDS);
         plan = new LinePlan(tracker, notches);
-        output = new double[channels][rates.slabFrames];
     }
 
     void reset() {
-        slab.reset();
+        input.reset();
         tracker.reset();
         subtraction.reset();
         notches.reset();
@@ -41,47 +44,23 @@ final class RemovalEngine {
         slot.publish();
     }
 
+    int room(int wanted) {
+        return input.room(wanted);
+    }
+
     /** Filters the frames just loaded. */
     void filter(int count) {
-        int from = slab.position();
-        int to = from + count;
+        int from = input.position();
+        input.take(slab.samples(), count);
         for (int c = 0; c < channels; c++) {
-            System.arraycopy(slab.data[c], from, output[c], from, count);
-            subtraction.run(c, output[c], from, to);
-            notches.run(c, output[c], from, to);
-        }
-    }
-
-    void store(float[] destination, int offset, int count) {
-        int from = slab.position();
-        for (int c = 0; c < channels; c++) {
-            for (int n = 0, i = offset + c; n < count; n++, i += channels) {
-                destination[i] = (float) output[c][from + n];
-            }
-        }
-    }
-
-    void store(double[] destination, int offset, int count) {
-        int from = slab.position();
-        for (int c = 0; c < channels; c++) {
-            for (int n = 0, i = offset + c; n < count; n++, i += channels) {
-                destination[i] = output[c][from + n];
-            }
-        }
-    }
-
-    void store(float[][] destination, int offset, int count) {
-        int from = slab.position();
-        for (int c = 0; c < channels; c++) {
-            for (int n = 0; n < count; n++) {
-                destination[c][offset + n] = (float) output[c][from + n];
-            }
+            subtraction.run(c, slab.samples(), c * Slab.FRAMES, from, count);
+            notches.run(c, slab.samples(), c * Slab.FRAMES, from, count);
         }
     }
 
     /** Moves on; at a slab's end the analysis looks at it. */
     void advance(int count) {
-        if (slab.advance(count)) {
+        if (input.advance(count)) {
             endSlab();
         }
     }
@@ -89,7 +68,7 @@ final class RemovalEngine {
     private void endSlab() {
         guard();
         MainsState before = tracker.proof.state();
-        tracker.slab(slab.data);
+        tracker.slab(input.data);
         boolean news = tracker.ticked() || before != tracker.proof.state();
         if (news) {
             phasors.retune();
@@ -109,9 +88,8 @@ final class RemovalEngine {
     }
 
     private void guard() {
-        if (slab.replaced() != replaced) {
-            replaced = slab.replaced();
-        }
+        replacedInputs = slab.replacedInputs();
+        replacedOutputs = slab.replacedOutputs();
         for (int c = 0; c < channels; c++) {
             if (!notches.isSound(c)) {
                 restarted = restarted + 1;

@@ -1,0 +1,5 @@
+/** The command line. */
+@NullMarked
+package io.github.polewright.samples.command;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,356 @@
+package io.github.polewright.samples.command;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import com.google.gson.JsonObject;
+import com.google.gson.JsonParser;
+import io.github.polewright.samples.Sounds;
+import io.github.polewright.samples.Wav;
+import io.github.polewright.samples.files.Recording;
+import java.io.IOException;
+import java.io.PrintWriter;
+import java.io.StringWriter;
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+
+final class CommandLineTest {
+
+    private static final double[] SIZES = {0.03, 0.015, 0.02, 0.006, 0.012, 0.003};
+
+    @TempDir
+    private Path folder;
+
+    private Path in;
+    private Path out;
+    private String printed = "";
+    private String complained = "";
+
+    @BeforeEach
+    void makeRecording() {
+        in = folder.resolve("in.wav");
+        out = folder.resolve("out.wav");
+        Wav.write(in, 8000, 1, 16, false, hummed(8000, 6));
+    }
+
+    private static double[] hummed(double rate, double seconds) {
+        return Sounds.plus(
+                Sounds.sum(
+                        Sounds.hum(rate, seconds, 50.04, SIZES, 1),
+                        Sounds.noise(rate, seconds, 0.002, 2),
+                        Sounds.sine(rate, seconds, 440, 0.1)),
+                0.02);
+    }
+
+    private int run(Object... args) {
+        StringWriter print = new StringWriter();
+        StringWriter complaints = new StringWriter();
+        String[] words = Stream.of(args).map(Object::toString).toArray(String[]::new);
+        int status = Main.run(new PrintWriter(print, true), new PrintWriter(complaints, true), words);
+        printed = print.toString();
+        complained = complaints.toString();
+        return status;
+    }
+
+    /** One line on standard error, nothing on the other, and the folder as it was. */
+    private void refused(int status, String words, Object... args) throws IOException {
+        List<String> before = listing();
+        byte[] input = Files.readAllBytes(in);
+        assertEquals(status, run(args), complained);
+        assertEquals("", printed);
+        assertEquals(1, complained.lines().count(), complained);
+        assertTrue(complained.contains(words), complained);
+        assertEquals(before, listing());
+        assertArrayEquals(input, Files.readAllBytes(in));
+    }
+
+    private List<String> listing() throws IOException {
+        try (Stream<Path> files = Files.walk(folder)) {
+            return files.map(Path::toString).sorted().toList();
+        }
+    }
+
+    @Test
+    void surveyPrintsWhatTheJsonHolds() throws IOException {
+        byte[] input = Files.readAllBytes(in);
+        Path json = folder.resolve("survey.json");
+        assertEquals(0, run("survey", in, "--json", json));
+        assertEquals("", complained);
+        JsonObject found = JsonParser.parseString(Files.readString(json)).getAsJsonObject();
+        assertTrue(found.get("humFound").getAsBoolean());
+        assertEquals(50.04, found.get("fundamentalHz").getAsDouble(), 0.005);
+        assertEquals(0.02, found.get("dcOffset").getAsJsonArray().get(0).getAsDouble(), 2e-4);
+        assertEquals(6, found.get("lines").getAsJsonArray().size());
+        assertEquals(8000, found.get("sampleRateHz").getAsDouble());
+        for (var line : found.get("lines").getAsJsonArray()) {
+            double level = line.getAsJsonObject().get("levelDb").getAsDouble();
+            assertTrue(printed.contains(String.format(Locale.ROOT, "%.1f", level)), printed);
+        }
+        assertTrue(printed.contains("licensed electrician"));
+        assertArrayEquals(input, Files.readAllBytes(in));
+        assertEquals(
+                List.of(folder, in, json).stream().map(Path::toString).sorted().toList(), listing());
+    }
+
+    @ParameterizedTest
+    @CsvSource({
+        "8000, 1, 16, false",
+        "11025, 2, 24, false",
+        "44100, 2, 16, false",
+        "48000, 1, 24, false",
+        "48000, 3, 32, true",
+        "96000, 2, 24, false",
+        "192000, 1, 32, true",
+        "16000, 1, 8, false",
+        "16000, 1, 32, false",
+        "8000, 1, 64, true",
+    })
+    void cleanKeepsTheFormatAndTakesOutHumAndDc(double rate, int channels, int bits, boolean floating)
+            throws IOException {
+        double[] one = hummed(rate, 6);
+        double[][] all = new double[channels][];
+        Arrays.fill(all, one);
+        // An odd number of frames, so that an odd number of bytes occurs.
+        double[] frames = Arrays.copyOf(Sounds.interleaved(all), channels * (one.length - 1));
+        Wav.write(in, rate, channels, bits, floating, frames);
+        byte[] input = Files.readAllBytes(in);
+        assertEquals(0, run("clean", in, out), complained);
+        assertArrayEquals(input, Files.readAllBytes(in));
+        byte[] output = Files.readAllBytes(out);
+        assertEquals(input.length, output.length);
+        assertArrayEquals(Arrays.copyOf(input, 44), Arrays.copyOf(output, 44), "the header");
+        assertEquals(
+                Recording.open(in).format().toString(),
+                Recording.open(out).format().toString());
+        double[] cleaned = Wav.read(out);
+        double[] wanted = Sounds.interleaved(
+                channels == 1
+                        ? new double[][] {Sounds.sine(rate, 6, 440, 0.1)}
+                        : Stream.generate(() -> Sounds.sine(rate, 6, 440, 0.1))
+                                .limit(channels)
+                                .toArray(double[][]::new));
+        double[] rest = Sounds.sum(cleaned, Sounds.scaled(Arrays.copyOf(wanted, cleaned.length), -1));
+        // The noise alone is 0.002; 8 bits add steps of 0.0078.
+        assertEquals(0, Sounds.rms(rest), bits == 8 ? 0.004 : 0.0026);
+        assertEquals(0, Arrays.stream(cleaned).average().orElseThrow(), bits == 8 ? 1e-3 : 1e-4);
+    }
+
+    @Test
+    void withoutHumOnlyDcGoes() {
+        double[] notes = Sounds.notes(44_100, 8, 3);
+        Wav.write(in, 44_100, 1, 32, true, Sounds.plus(notes, 0.05));
+        assertEquals(0, run("clean", in, out), complained);
+        assertTrue(printed.contains("no hum found"), printed);
+        assertTrue(printed.contains("only DC is removed"), printed);
+        double[] rest = Sounds.sum(Wav.read(out), Sounds.scaled(notes, -1));
+        // A notch of 1 Hz at DC turns a tone of 55 Hz by 1 degree, and higher ones less.
+        assertEquals(0, Sounds.rms(rest) / Sounds.rms(notes), 0.02);
+        assertEquals(0, Arrays.stream(Wav.read(out)).average().orElseThrow(), 1e-4);
+    }
+
+    @Test
+    void withoutHumAndWithDcKeptNothingChanges() throws IOException {
+        Wav.write(in, 44_100, 2, 24, false, Sounds.plus(Sounds.notes(44_100, 4, 3), 0.05));
+        assertEquals(0, run("clean", "--no-dc", in, out), complained);
+        assertArrayEquals(Files.readAllBytes(in), Files.readAllBytes(out));
+    }
+
+    /** A notch left where the hum was on average would let pass 2 d / width of a line d Hz away: here 0.006 each. */
+    @Test
+    void theNotchesFollowADrift() {
+        double[] noise = Sounds.noise(8000, 60, 0.001, 4);
+        double[] sound = noise.clone();
+        for (int n = 0; n < sound.length; n++) {
+            double t = n / 8000.0;
+            double cycles = 49.97 * t + 0.001 * t * t / 2;
+            for (int k = 1; k <= 6; k++) {
+                sound[n] += 0.05 / k * Math.sin(2 * Math.PI * k * cycles + k);
+            }
+        }
+        Wav.write(in, 8000, 1, 24, false, sound);
+        assertEquals(0, run("clean", in, out), complained);
+        double[] rest = Sounds.sum(Wav.read(out), Sounds.scaled(noise, -1));
+        double atEndRms = Sounds.rms(Arrays.copyOfRange(rest, 50 * 8000, 60 * 8000));
+        System.out.printf("drift of 1 mHz/s: %.5f left of hum of %.3f%n", atEndRms, 0.043);
+        assertEquals(0, atEndRms, 0.002);
+    }
+
+    @Test
+    void optionsAreHeeded() {
+        assertEquals(0, run("clean", in, out, "--harmonics", "2", "--no-dc", "--width", "1", "--mains", "50"));
+        assertTrue(printed.contains("2 lines"), printed);
+        double[] cleaned = Wav.read(out);
+        assertEquals(0.02, Arrays.stream(cleaned).average().orElseThrow(), 1e-3);
+        assertEquals(0, run("clean", in, out, "--mains", "60"), complained);
+        assertTrue(printed.contains("no hum found"), printed);
+    }
+
+    @Test
+    void clippedAndNonFiniteSamplesAreCounted() {
+        double[] sound = Sounds.sine(8000, 3, 440, 0.5);
+        sound[100] = Double.NaN;
+        sound[9000] = Double.NEGATIVE_INFINITY;
+        Wav.write(in, 8000, 1, 32, true, sound);
+        assertEquals(0, run("clean", in, out), complained);
+        assertTrue(printed.contains("not finite 2 samples"), printed);
+        for (double sample : Wav.read(out)) {
+            assertTrue(Double.isFinite(sample));
+        }
+        double[] loud = Sounds.plus(Sounds.sine(8000, 3, 440, 0.999), 0);
+        for (int n = 0; n < loud.length; n++) {
+            loud[n] = n < 8000 ? 0.9 : loud[n];
+        }
+        Wav.write(in, 8000, 1, 16, false, loud);
+        assertEquals(0, run("clean", in, out), complained);
+        assertFalse(printed.contains("clipped    0 samples"), printed);
+    }
+
+    @Test
+    void aReportHoldsChartsAndAPage() throws IOException {
+        Path report = folder.resolve("new").resolve("report");
+        assertEquals(0, run("clean", in, out, "--report", report), complained);
+        for (String name : List.of("spectra-low", "spectra-whole", "response")) {
+            String svg = Files.readString(report.resolve(name + ".svg"));
+            assertTrue(svg.contains("<svg"));
+            byte[] png = Files.readAllBytes(report.resolve(name + ".png"));
+            assertEquals(0x89504E47, ByteBuffer.wrap(png).getInt());
+            assertTrue(Files.readString(report.resolve("index.html")).contains(name + ".svg"));
+        }
+        try (Stream<Path> files = Files.list(report)) {
+            assertEquals(7, files.count());
+        }
+    }
+
+    @Test
+    void demoRunsTheWholePath() throws IOException {
+        Path demo = folder.resolve("demo");
+        assertEquals(0, run("demo", "--folder", demo), complained);
+        assertTrue(printed.contains("found at 49.9"), printed);
+        JsonObject found = JsonParser.parseString(Files.readString(demo.resolve("survey.json")))
+                .getAsJsonObject();
+        assertTrue(found.get("lines").getAsJsonArray().size() >= 10);
+        assertTrue(Files.exists(demo.resolve("report").resolve("index.html")));
+        double[] scene = Wav.read(demo.resolve("scene.wav"));
+        double[] hummed = Wav.read(demo.resolve("scene-with-hum.wav"));
+        double[] cleaned = Wav.read(demo.resolve("scene-cleaned.wav"));
+        double before = Sounds.rms(Sounds.sum(hummed, Sounds.scaled(scene, -1)));
+        double after = Sounds.rms(Sounds.sum(cleaned, Sounds.scaled(scene, -1)));
+        double gainDb = 20 * Math.log10(before / after);
+        System.out.printf("demo: what is not the scene falls by %.1f dB%n", gainDb);
+        // The notches take a little of the scene, too, which counts here as if it were hum.
+        assertTrue(gainDb > 15, "gain of " + gainDb + " dB");
+    }
+
+    @Test
+    void wrongUsageIsRefused() throws IOException {
+        refused(Main.USAGE, "a command is missing");
+        refused(Main.USAGE, "washing", "washing", in, out);
+        refused(Main.USAGE, "--loud", "clean", in, out, "--loud");
+        refused(Main.USAGE, "--loud", "survey", in, "--loud");
+        refused(Main.USAGE, "OUT.wav", "clean", in);
+        refused(Main.USAGE, "IN.wav", "survey");
+        refused(Main.USAGE, "--width", "clean", in, out, "--width", "0");
+        refused(Main.USAGE, "--width", "clean", in, out, "--width", "NaN");
+        refused(Main.USAGE, "--width", "clean", in, out, "--width", "wide");
+        refused(Main.USAGE, "--mains", "clean", in, out, "--mains", "-50");
+        refused(Main.USAGE, "--harmonics", "survey", in, "--harmonics", "0");
+    }
+
+    @Test
+    void theInputIsNeverTheOutput() throws IOException {
+        refused(Main.USAGE, "never written", "clean", in, in);
+        refused(
+                Main.USAGE,
+                "never written",
+                "clean",
+                in,
+                folder.resolve("x").resolve("..").resolve("in.wav"));
+        refused(Main.USAGE, "never written", "survey", in, "--json", in);
+        Path link = Files.createSymbolicLink(folder.resolve("link.wav"), in);
+        refused(Main.USAGE, "never written", "clean", in, link);
+        refused(Main.USAGE, "never written", "clean", link, in);
+        Path hard = Files.createLink(folder.resolve("hard.wav"), in);
+        refused(Main.USAGE, "never written", "clean", in, hard);
+        Path relative = Path.of("").toAbsolutePath().relativize(in.toRealPath());
+        refused(Main.USAGE, "never written", "clean", in, relative);
+    }
+
+    @Test
+    void filesThatCannotBeReadAreRefused() throws IOException {
+        refused(Main.FAILED, "does not exist", "survey", folder.resolve("none.wav"));
+        refused(Main.FAILED, "does not exist", "clean", folder.resolve("none.wav"), out);
+        refused(Main.FAILED, "is not a file", "survey", folder);
+        byte[] whole = Files.readAllBytes(in);
+        Path bad = folder.resolve("bad.wav");
+        for (int length : new int[] {0, 10, 30, 44, 45, whole.length / 2, whole.length - 1}) {
+            Files.write(bad, Arrays.copyOf(whole, length));
+            String words = length == 0 ? "is empty" : length < 44 ? "not a whole WAV file" : "truncated";
+            refused(Main.FAILED, words, "survey", bad);
+            refused(Main.FAILED, words, "clean", bad, out, "--report", folder.resolve("report"));
+        }
+        byte[] noSamples = Arrays.copyOf(whole, 44);
+        ByteBuffer.wrap(noSamples).order(ByteOrder.LITTLE_ENDIAN).putInt(40, 0).putInt(4, 36);
+        Files.write(bad, noSamples);
+        refused(Main.FAILED, "holds no samples", "clean", bad, out);
+        Files.writeString(bad, "This is not a sound at all, but a text of some length.", StandardCharsets.US_ASCII);
+        refused(Main.FAILED, "not a whole WAV file of uncompressed", "clean", bad, out);
+    }
+
+    @Test
+    void compressedFilesAreRefused() throws IOException {
+        byte[] whole = Files.readAllBytes(in);
+        Path bad = folder.resolve("bad.wav");
+        // A-law, mu-law, two kinds of ADPCM and MPEG layer 3, by the registered format tags.
+        for (short tag : new short[] {6, 7, 2, 17, 0x55}) {
+            byte[] other = whole.clone();
+            ByteBuffer header = ByteBuffer.wrap(other).order(ByteOrder.LITTLE_ENDIAN);
+            header.putShort(20, tag).putShort(32, (short) 1).putShort(34, (short) 8);
+            Files.write(bad, other);
+            refused(Main.FAILED, "compressed", "clean", bad, out);
+            refused(Main.FAILED, "compressed", "survey", bad);
+        }
+    }
+
+    @Test
+    void placesThatCannotBeWrittenAreRefused() throws IOException {
+        refused(
+                Main.FAILED,
+                "does not exist",
+                "clean",
+                in,
+                folder.resolve("none").resolve("out.wav"));
+        refused(Main.FAILED, "is a folder", "clean", in, folder);
+        refused(
+                Main.FAILED,
+                "does not exist",
+                "survey",
+                in,
+                "--json",
+                folder.resolve("none").resolve("a.json"));
+        refused(Main.FAILED, "cannot make the folder", "clean", in, out, "--report", in.resolve("report"));
+        refused(Main.FAILED, "cannot make the folder", "demo", "--folder", in);
+    }
+
+    @Test
+    void helpAndVersionAreNoErrors() {
+        assertEquals(0, run("--help"));
+        assertTrue(printed.contains("survey") && printed.contains("clean") && printed.contains("demo"));
+        assertEquals(0, run("clean", "--help"));
+        assertTrue(printed.contains("--report"));
+        assertEquals(0, run("--version"));
+    }
+}

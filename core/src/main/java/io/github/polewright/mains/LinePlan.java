@@ -13,8 +13,8 @@ final class LinePlan {
     private static final double SHARE = 0.001;
 
     private static final double WIDTH_PACE = 0.3;
-    private static final double DROP = 0.3;
-    private static final double TAKE = 0.8;
+    private static final double DROP = 0.8;
+    private static final double TAKE = 2;
 
     final boolean[] notched;
     final boolean[] subtracted;
@@ -52,7 +52,7 @@ final class LinePlan {
     private void width(int i, int order, double uncertaintyHz) {
         double perHz = tracker.presence.spread[i] * tracker.tickSeconds() / 2;
         double power = tracker.presence.power(i);
-        double line = power / 2;
+        double line = tracker.bank.power(i) / 2;
         if (!notches.isOpen(i)) {
             openSeconds[i] = 0;
             worth[i] = worth[i] && line > DROP * perHz * NotchBank.NARROWEST_HZ * Math.PI / 2

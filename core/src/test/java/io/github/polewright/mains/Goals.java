@@ -108,8 +108,7 @@ final class Goals {
         double later = Measure.db(
                 Measure.differencePower(trace.output, clean.samples(), trace.sample(at + 1.5), trace.sample(seconds))
                         / before);
-        double added = Measure.db(
-                Measure.power(trace.output, from, half) / Measure.power(clean.samples(), from, half));
+        double added = Measure.db(Measure.power(trace.output, from, half) / Measure.power(clean.samples(), from, half));
         String name = String.format(Locale.ROOT, "%s, hum times %.1f, %s: ", clean.name(), factor, way);
         List<Figure> figures = new ArrayList<>();
         figures.add(new Figure(name + "residue over hum before, first 0.5 s", first, -2, "dB"));
@@ -142,10 +141,16 @@ final class Goals {
         String name = clean.name() + ", 5 s of silence: ";
         return List.of(
                 new Figure(name + "output power from 80 ms on", left, 0, ""),
-                new Figure(name + "error when sound is back", 1000 * trace.worstError(14.01, 14.1, hum.frequencyHz),
-                        30, "mHz"),
-                new Figure(name + "rms error from 1 s later",
-                        1000 * trace.rmsError(15, seconds, hum.frequencyHz), 10, "mHz"));
+                new Figure(
+                        name + "error when sound is back",
+                        1000 * trace.worstError(14.01, 14.1, hum.frequencyHz),
+                        30,
+                        "mHz"),
+                new Figure(
+                        name + "rms error from 1 s later",
+                        1000 * trace.rmsError(15, seconds, hum.frequencyHz),
+                        10,
+                        "mHz"));
     }
 
     static List<Figure> change(Clean clean, double fromHz, double toHz, int seed) {
@@ -162,7 +167,9 @@ final class Goals {
             }
         }
         return List.of(new Figure(
-                String.format(Locale.ROOT, "%s, %.0f to %.0f Hz: following after", clean.name(), fromHz, toHz), at, 4,
+                String.format(Locale.ROOT, "%s, %.0f to %.0f Hz: following after", clean.name(), fromHz, toHz),
+                at,
+                4,
                 "s"));
     }
 
@@ -172,8 +179,8 @@ final class Goals {
         Hum hum = Hum.of(rate, track, Hum.mixed(12, seed), seed).scaledTo(clean.samples(), 0);
         java.util.Arrays.fill(hum.samples, 0, (int) (6 * rate), 0);
         Trace trace = Trace.of(Measure.add(clean.samples(), hum.samples), rate, Removal.SUBTRACTION);
-        return List.of(
-                new Figure(clean.name() + ", hum begins at 6 s: following after", trace.followingAfter(0) - 6, 12, "s"));
+        return List.of(new Figure(
+                clean.name() + ", hum begins at 6 s: following after", trace.followingAfter(0) - 6, 12, "s"));
     }
 
     /** Faint hum must never make things worse. */

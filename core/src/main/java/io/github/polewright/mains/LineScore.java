@@ -6,7 +6,8 @@ import java.util.Arrays;
  * How much a spectrum looks like a comb on each fundamental from 45 to 65 Hz: the sum over seven harmonics of the log
  * ratio of line to floor, averaged over past spectra (derived for this project).
  *
- * <p>Works in slices: {@link #floor} some bins a call, {@link #grid} some fundamentals a call, then {@link #judge}.
+ * <p>Works in slices: {@link #floor} some bins a call, {@link #grid} some fundamentals a call, then
+ * {@link #accumulate} and {@link #judge}.
  */
 final class LineScore {
 
@@ -31,6 +32,7 @@ final class LineScore {
     private final double[] score = new double[GRID];
     private final SlidingMedian median = new SlidingMedian(40);
     private int reach;
+    private int peak;
     private double peakHz;
     private double peakHeight;
 
@@ -91,19 +93,23 @@ final class LineScore {
         }
     }
 
-    /** Adds the new score to the old ones times {@code keep}; returns the peak over the rms away from it. */
-    double judge(double keep) {
+    /** Adds the new score to the old ones times {@code keep}. */
+    void accumulate(double keep) {
         double mean = 0;
         for (double s : fresh) {
             mean += s / GRID;
         }
-        int peak = 0;
+        peak = 0;
         for (int g = 0; g < GRID; g++) {
             score[g] = keep * score[g] + fresh[g] - mean;
             if (score[g] > score[peak]) {
                 peak = g;
             }
         }
+    }
+
+    /** The peak over the rms away from it. */
+    double judge() {
         double square = 0;
         int count = 0;
         int away = (int) (AWAY_HZ / STEP_HZ);
@@ -113,11 +119,11 @@ final class LineScore {
                 count++;
             }
         }
-        place(peak);
+        place();
         return square > 0 ? peakHeight / Math.sqrt(square / count) : 0;
     }
 
-    private void place(int peak) {
+    private void place() {
         double shift = 0;
         if (peak > 0 && peak < GRID - 1) {
             double curve = score[peak - 1] - 2 * score[peak] + score[peak + 1];

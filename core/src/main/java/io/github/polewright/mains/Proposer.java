@@ -14,9 +14,10 @@ final class Proposer {
     private static final double THRESHOLD = 5;
     private static final double SAME_HZ = 0.15;
 
-    private static final int LOAD = Transform.STAGES;
+    private static final int LOAD_SLICES = 4;
+    private static final int TRANSFORM_SLICES = LOAD_SLICES + Transform.STAGES;
     private static final int CHANNEL_SLICES = 1 + LineScore.FLOOR_SLICES;
-    private static final int PAIR_SLICES = 1 + LOAD + 2 * CHANNEL_SLICES;
+    private static final int PAIR_SLICES = TRANSFORM_SLICES + 2 * CHANNEL_SLICES;
 
     private final Recent recent;
     private final Transform transform = new Transform();
@@ -89,9 +90,11 @@ final class Proposer {
             pairSlice(pair, within);
         } else if (last < LineScore.GRID_SLICES) {
             score.grid(last);
+        } else if (last == LineScore.GRID_SLICES) {
+            score.accumulate(searching ? QUICK_KEEP : SLOW_KEEP);
         } else {
             slice = -1;
-            strength = score.judge(searching ? QUICK_KEEP : SLOW_KEEP);
+            strength = score.judge();
             double hz = score.peakHz();
             boolean again = strength > THRESHOLD && Math.abs(hz - lastHz) < SAME_HZ;
             lastHz = strength > THRESHOLD ? hz : 0;
@@ -103,12 +106,12 @@ final class Proposer {
     }
 
     private void pairSlice(int pair, int within) {
-        if (within == 0) {
-            load(2 * pair);
-        } else if (within <= LOAD) {
-            transform.stage(within - 1);
+        if (within < LOAD_SLICES) {
+            load(2 * pair, within);
+        } else if (within < TRANSFORM_SLICES) {
+            transform.stage(within - LOAD_SLICES);
         } else {
-            int rest = within - LOAD - 1;
+            int rest = within - TRANSFORM_SLICES;
             boolean second = rest >= CHANNEL_SLICES;
             int part = rest % CHANNEL_SLICES;
             if (second && 2 * pair + 1 >= recent.channels) {
@@ -122,17 +125,21 @@ final class Proposer {
         }
     }
 
-    private void load(int channel) {
+    /** The ring runs on between the slices: a slice reads as far back as its first one did. */
+    private void load(int channel, int part) {
         boolean two = channel + 1 < recent.channels;
+        int from = part * Transform.POINTS / LOAD_SLICES;
+        int to = from + Transform.POINTS / LOAD_SLICES;
         double turnReal = Math.cos(2 * Math.PI / length);
         double turnImaginary = Math.sin(2 * Math.PI / length);
-        double re = Math.cos(Math.PI / length);
-        double im = Math.sin(Math.PI / length);
-        for (int i = 0; i < Transform.POINTS; i++) {
+        double re = Math.cos(2 * Math.PI * (from + 0.5) / length);
+        double im = Math.sin(2 * Math.PI * (from + 0.5) / length);
+        for (int i = from; i < to; i++) {
             int place = transform.place(i);
             double hann = i < length ? 0.5 - 0.5 * re : 0;
-            transform.real[place] = i < length ? hann * recent.at(channel, i, length) : 0;
-            transform.imaginary[place] = i < length && two ? hann * recent.at(channel + 1, i, length) : 0;
+            int back = length + part;
+            transform.real[place] = i < length ? hann * recent.at(channel, i, back) : 0;
+            transform.imaginary[place] = i < length && two ? hann * recent.at(channel + 1, i, back) : 0;
             double turned = re * turnReal - im * turnImaginary;
             im = re * turnImaginary + im * turnReal;
             re = turned;

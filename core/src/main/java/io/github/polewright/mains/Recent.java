@@ -7,6 +7,9 @@ final class Recent {
 
     static final int LENGTH = Transform.POINTS;
 
+    /** A power of two, and longer: what is read in slices must not be overwritten meanwhile. */
+    private static final int RING = 2 * LENGTH;
+
     private static final double AUDIBLE = 1e-9;
     /** A quarter of a second of silence at most before the first sound. */
     private static final int LATEST = 250;
@@ -24,7 +27,7 @@ final class Recent {
 
     Recent(int channels) {
         this.channels = channels;
-        ring = new double[channels][LENGTH];
+        ring = new double[channels][RING];
         first = new double[channels][LENGTH];
     }
 
@@ -41,7 +44,7 @@ final class Recent {
             }
             firstCount++;
         }
-        next = (next + 1) % LENGTH;
+        next = (next + 1) % RING;
         filled = Math.min(filled + 1, LENGTH);
     }
 
@@ -55,14 +58,16 @@ final class Recent {
         return firstCount == LENGTH && quietCount < LATEST;
     }
 
-    /** Sample {@code index} of the last {@code length}, oldest first. */
+    /** Sample {@code index} counted from {@code length} samples ago, oldest first. */
     double at(int channel, int index, int length) {
-        return ring[channel][(next - length + index + LENGTH) % LENGTH];
+        return ring[channel][(next - length + index + 2 * RING) & (RING - 1)];
     }
 
     void copyLast(int channel, double[] destination) {
-        System.arraycopy(ring[channel], next, destination, 0, LENGTH - next);
-        System.arraycopy(ring[channel], 0, destination, LENGTH - next, next);
+        int start = (next + LENGTH) & (RING - 1);
+        int head = Math.min(LENGTH, RING - start);
+        System.arraycopy(ring[channel], start, destination, 0, head);
+        System.arraycopy(ring[channel], 0, destination, head, LENGTH - head);
     }
 
     void reset() {

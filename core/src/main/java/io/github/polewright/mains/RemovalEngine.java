@@ -15,6 +15,7 @@ final class RemovalEngine {
     volatile long replacedOutputs;
     volatile long restarted;
 
+    private long restarts;
     private final SlabInput input;
     private final Tracker tracker;
     private final LinePhasors phasors;
@@ -92,8 +93,9 @@ final class RemovalEngine {
         replacedOutputs = slab.replacedOutputs();
         for (int c = 0; c < channels; c++) {
             if (!notches.isSound(c)) {
-                restarted = restarted + 1;
+                restarts++;
             }
         }
+        restarted = restarts;
     }
 }

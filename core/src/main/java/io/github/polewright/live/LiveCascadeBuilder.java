@@ -79,6 +79,7 @@ public final class LiveCascadeBuilder {
      */
     public LiveCascade build() {
         LiveCascade.checkFits(cascade, mostSections);
+        Rehearsal.held();
         return new LiveCascade(cascade, channels, form, mostSections, rampFrames);
     }
 

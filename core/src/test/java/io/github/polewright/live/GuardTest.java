@@ -11,7 +11,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collections;
 import java.util.List;
-import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.EnumSource;
@@ -48,19 +47,14 @@ class GuardTest {
 
     @ParameterizedTest(name = "{0} {1}")
     @MethodSource("tails")
-    void aMinuteOfSilenceEndsAtExactlyZero(Form form, String name, Cascade cascade) {
-        for (SampleFormat format : List.of(SampleFormat.DOUBLES, SampleFormat.FLOATS)) {
-            endsAtZero(form, format, cascade, MINUTE);
-        }
+    void tenMinutesOfSilenceEndAtExactlyZero(Form form, String name, Cascade cascade) {
+        endsAtZero(form, SampleFormat.DOUBLES, cascade, 10 * MINUTE);
     }
 
-    @Tag("slow")
     @ParameterizedTest(name = "{0} {1}")
     @MethodSource("tails")
-    void tenMinutesOfSilenceEndAtExactlyZero(Form form, String name, Cascade cascade) {
-        for (SampleFormat format : List.of(SampleFormat.DOUBLES, SampleFormat.FLOATS)) {
-            endsAtZero(form, format, cascade, 10 * MINUTE);
-        }
+    void aMinuteOfFloatSilenceEndsAtExactlyZero(Form form, String name, Cascade cascade) {
+        endsAtZero(form, SampleFormat.FLOATS, cascade, MINUTE);
     }
 
     private static void endsAtZero(Form form, SampleFormat format, Cascade cascade, int frames) {

@@ -55,8 +55,8 @@ final class LinePlan {
         double line = tracker.bank.power(i) / 2;
         if (!notches.isOpen(i)) {
             openSeconds[i] = 0;
-            worth[i] = worth[i] && line > DROP * perHz * NotchBank.NARROWEST_HZ * Math.PI / 2
-                    || line > TAKE * perHz * NotchBank.NARROWEST_HZ * Math.PI / 2;
+            double cost = perHz * NotchBank.NARROWEST_HZ * Math.PI / 2;
+            worth[i] = line > (worth[i] ? DROP : TAKE) * cost;
         }
         openSeconds[i] += tracker.tickSeconds();
         double off = order * uncertaintyHz;

@@ -127,7 +127,7 @@ final class Proof {
             steadyPower = power;
         }
         proofSeconds += seconds;
-        if (proofSeconds >= SLOW_PROOF_SECONDS || lines >= 3 && quick(frequencyHz)) {
+        if (proofSeconds >= SLOW_PROOF_SECONDS || (lines >= 3 && quick(frequencyHz))) {
             state = MainsState.FOLLOWING;
             sinceProof = 0;
         }
@@ -136,11 +136,11 @@ final class Proof {
     private boolean quick(double frequencyHz) {
         double cents = TemperedNotes.centsAway(frequencyHz);
         boolean moved = highestHz - lowestHz > MOVED_HZ || cents > EXACT_NOTE_CENTS;
-        boolean noNote = cents > NOTE_CENTS || moved && proofSeconds > NEAR_NOTE_SECONDS;
+        boolean noNote = cents > NOTE_CENTS || (moved && proofSeconds > NEAR_NOTE_SECONDS);
         if (jumped || !noNote || trialSeconds < QUICK_SECONDS) {
             return false;
         }
-        return matched || sinceProof < MEMORY_SECONDS && trialSeconds > RECENT_TRIAL_SECONDS;
+        return matched || (sinceProof < MEMORY_SECONDS && trialSeconds > RECENT_TRIAL_SECONDS);
     }
 
     private void following(double seconds, boolean jump, double frequencyHz) {

@@ -21,7 +21,6 @@ final class ReadingSlot {
         }
     }
 
-    private static final MainsState[] STATES = MainsState.values();
     private static final int HEAD = 3;
 
     private final Tracker tracker;
@@ -45,7 +44,7 @@ final class ReadingSlot {
         VarHandle.storeStoreFence();
         MainsState state = tracker.proof.state();
         boolean known = state != MainsState.SEARCHING;
-        put(0, state.ordinal());
+        put(0, code(state));
         put(1, known ? tracker.loop.frequencyHz() : Double.NaN);
         put(2, known ? tracker.loop.uncertaintyHz() : Double.NaN);
         for (int i = 0; i < tracker.bank.size(); i++) {
@@ -54,6 +53,25 @@ final class ReadingSlot {
             put(HEAD + i, there ? scale * Math.sqrt(tracker.bank.power(i)) : 0);
         }
         COUNT.setRelease(this, before + 2);
+    }
+
+    private static double code(MainsState state) {
+        return switch (state) {
+            case SEARCHING -> 0;
+            case PROVING -> 1;
+            case FOLLOWING -> 2;
+            case HOLDING -> 3;
+        };
+    }
+
+    private static MainsState state(double code) {
+        if (code < 1) {
+            return MainsState.SEARCHING;
+        }
+        if (code < 2) {
+            return MainsState.PROVING;
+        }
+        return code < 3 ? MainsState.FOLLOWING : MainsState.HOLDING;
     }
 
     private void put(int i, double value) {
@@ -76,6 +94,6 @@ final class ReadingSlot {
         }
         double[] levels = new double[copy.length - HEAD];
         System.arraycopy(copy, HEAD, levels, 0, levels.length);
-        return new MainsReading(STATES[(int) copy[0]], copy[1], copy[2], tracker.bank.lines, levels);
+        return new MainsReading(state(copy[0]), copy[1], copy[2], tracker.bank.lines, levels);
     }
 }

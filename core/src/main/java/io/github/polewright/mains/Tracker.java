@@ -139,7 +139,7 @@ final class Tracker {
         if (!proof.isSlow() || TemperedNotes.centsAway(frequencyHz) < NOTE_CENTS) {
             return false;
         }
-        return away > RIVAL_HZ || away > NEAR_RIVAL_HZ && presence.clearLines() < 3;
+        return away > RIVAL_HZ || (away > NEAR_RIVAL_HZ && presence.clearLines() < 3);
     }
 
     private void startTrial(double frequencyHz) {
@@ -236,7 +236,7 @@ final class Tracker {
 
     /** Whether the input is silent beside the known hum. */
     boolean isSilent() {
-        return zeroSlabs == ZERO_SLABS || silent && !digital;
+        return zeroSlabs == ZERO_SLABS || (silent && !digital);
     }
 
     /** By how much the last tick moved the phase of the fundamental, beyond its running on. */

@@ -29,7 +29,7 @@ final class Transform {
 
     void stage(int stage) {
         int half = 1 << stage;
-        int stride = POINTS / 2 >> stage;
+        int stride = (POINTS / 2) >> stage;
         for (int start = 0; start < POINTS; start += 2 * half) {
             for (int i = 0; i < half; i++) {
                 int upper = start + i;

@@ -45,12 +45,13 @@ final class Amplitudes {
         stepped = false;
     }
 
-    /** The first tick knows nothing yet: the innovation is the amplitude. */
+    /** The first tick cannot tell a line from programme: half of it is taken for each. */
     void adoptFirst() {
         for (int i = 0; i < bank.size(); i++) {
-            bank.re[i] += bank.newRe[i];
-            bank.im[i] += bank.newIm[i];
-            variance[i] = -1;
+            innovation.adoptFirst(i);
+            bank.re[i] = 0.5 * bank.newRe[i];
+            bank.im[i] = 0.5 * bank.newIm[i];
+            variance[i] = 0.5 * innovation.noise[i];
         }
     }
 
@@ -76,9 +77,8 @@ final class Amplitudes {
         double usual = innovation.noise[i];
         double mean = meanPower(i);
         changed[i] = mean > CHANGE_RATIO * usual;
-        double before = variance[i] < 0 ? usual : variance[i];
         double drift = DRIFT * seconds * Math.max(bank.power(i), LEAST_DRIFT * usual);
-        double prior = before + drift + (changed[i] ? CHANGE_DRIFT * mean : 0);
+        double prior = variance[i] + drift + (changed[i] ? CHANGE_DRIFT * mean : 0);
         double gain = prior / (prior + noise);
         variance[i] = (1 - gain) * prior;
         double re = bank.re[i];
@@ -129,6 +129,6 @@ final class Amplitudes {
 
     /** Error variance of a line's amplitude. */
     double variance(int i) {
-        return Math.max(variance[i], 0);
+        return variance[i];
     }
 }

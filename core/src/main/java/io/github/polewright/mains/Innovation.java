@@ -38,11 +38,17 @@ final class Innovation {
         Arrays.fill(worst, 0);
     }
 
+    /** Takes the first tick as noise, which later ones outweigh. */
+    void adoptFirst(int i) {
+        noise[i] = bank.newRe[i] * bank.newRe[i] + bank.newIm[i] * bank.newIm[i];
+        worst[i] = noise[i];
+    }
+
     /** Evaluates tick number {@code tick}, from 1. */
     void evaluate(int tick, double seconds) {
         phase(noise, MOST_FIRST_RADIANS);
         double first = phaseInformation > 0 ? radians : 0;
-        double keep = Math.max(1.0 / tick, Math.min(1, seconds / NOISE_SECONDS));
+        double keep = Math.max(1.0 / (tick + 1), Math.min(1, seconds / NOISE_SECONDS));
         double numerator = 0;
         levelInformation = 0;
         for (int k = 0; k < bank.lines; k++) {

@@ -14,7 +14,7 @@ final class Presence {
     private static final double VARIANCE_MARGIN = 1.5;
     private static final double SEEN = 12;
     private static final double UNSEEN = 4;
-    private static final double KNOWN = 9;
+    private static final double KNOWN = 4;
     private static final double LEAST_SHARE = 0.12;
 
     /** Smoothed squared spread of the amplitude a tick: the programme. */

@@ -41,6 +41,11 @@ final class FrequencyLoop {
         cross = Math.min(cross, 0.999 * most);
     }
 
+    /** Variance of the phase, in radians squared. */
+    double phaseVariance() {
+        return phaseVariance;
+    }
+
     /** Takes a phase error with its information; returns by how much the phase moves. */
     double correct(double radians, double information, double seconds) {
         if (!(information > 1e-12)) {

@@ -9,8 +9,9 @@ import java.util.Arrays;
 final class Innovation {
 
     private static final double NOISE_SECONDS = 0.25;
-    private static final double MOST_FIRST_RADIANS = 0.5;
-    private static final double MOST_RADIANS = 0.6;
+    private static final double LEAST_PRIOR = 0.05;
+    private static final double PRIOR_FACTOR = 4;
+    private static final double FLAT = 1;
 
     /** Innovation power a tick, smoothed, without the common phase error. */
     final double[] noise;
@@ -20,6 +21,7 @@ final class Innovation {
     private final LineBank bank;
     private final double[] offRe;
     private final double[] offIm;
+    private final PhaseLikelihood likelihood;
     private double radians;
     private double phaseInformation;
     private double level;
@@ -31,6 +33,7 @@ final class Innovation {
         worst = new double[bank.size()];
         offRe = new double[bank.size()];
         offIm = new double[bank.size()];
+        likelihood = new PhaseLikelihood(bank.lines);
     }
 
     void reset() {
@@ -44,10 +47,11 @@ final class Innovation {
         worst[i] = noise[i];
     }
 
-    /** Evaluates tick number {@code tick}, from 1. */
-    void evaluate(int tick, double seconds) {
-        phase(noise, MOST_FIRST_RADIANS);
-        double first = phaseInformation > 0 ? radians : 0;
+    /** Evaluates tick number {@code tick}, from 1; {@code phaseVariance} is what the loop leaves open beforehand. */
+    void evaluate(int tick, double seconds, double phaseVariance, boolean running) {
+        double wide = Math.max(LEAST_PRIOR * LEAST_PRIOR, PRIOR_FACTOR * PRIOR_FACTOR * phaseVariance);
+        gather(noise);
+        double first = running ? likelihood.search(wide) : likelihood.linear(phaseInformation);
         double keep = Math.max(1.0 / (tick + 1), Math.min(1, seconds / NOISE_SECONDS));
         double numerator = 0;
         levelInformation = 0;
@@ -63,7 +67,8 @@ final class Innovation {
             }
         }
         level = levelInformation > 0 ? numerator / levelInformation : 0;
-        phase(worst, MOST_RADIANS);
+        gather(worst);
+        radians = running ? likelihood.refine(first, FLAT) : likelihood.linear(phaseInformation);
     }
 
     private void learn(int i, double cosine, double sine, double keep) {
@@ -76,21 +81,20 @@ final class Innovation {
         worst[i] = Math.max(noise[i], power);
     }
 
-    private void phase(double[] weights, double most) {
-        double numerator = 0;
+    private void gather(double[] weights) {
+        likelihood.clear();
         phaseInformation = 0;
         for (int k = 0; k < bank.lines; k++) {
             double order = k + 1;
             for (int i = k; i < bank.size(); i += bank.lines) {
                 if (weights[i] > 0) {
                     double cross = bank.newIm[i] * bank.re[i] - bank.newRe[i] * bank.im[i];
-                    numerator += order * cross / weights[i];
+                    double along = bank.newRe[i] * bank.re[i] + bank.newIm[i] * bank.im[i];
+                    likelihood.add(k, (bank.power(i) + along) / weights[i], cross / weights[i]);
                     phaseInformation += order * order * bank.power(i) / weights[i];
                 }
             }
         }
-        double raw = phaseInformation > 0 ? numerator / phaseInformation : 0;
-        radians = Math.max(-most, Math.min(most, raw));
     }
 
     /** Common phase error of the fundamental. */

@@ -192,7 +192,8 @@ final class Tracker {
     }
 
     private void learn() {
-        innovation.evaluate(ticks - 1, tickSeconds);
+        boolean running = proof.holds() && !loop.isSettled();
+        innovation.evaluate(ticks - 1, tickSeconds, loop.phaseVariance(), running);
         moved = loop.correct(innovation.radians(), innovation.phaseInformation(), tickSeconds);
         phase += moved;
         amplitudes.update(moved, tickSeconds, loop.isSettled());

@@ -11,7 +11,7 @@ final class FrequencyLoop {
     private static final double RISE_SECONDS = 0.08;
     private static final double FALL_SECONDS = 0.4;
 
-    private static final double SETTLED = 4;
+    private static final double SETTLED = 10;
 
     private double frequencyHz;
     private double phaseVariance;

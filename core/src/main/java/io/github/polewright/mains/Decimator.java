@@ -2,10 +2,12 @@ package io.github.polewright.mains;
 
 import java.util.Arrays;
 
-/** One channel's way from the sample rate to the analysis rate: low-pass, keep every n-th, first-order high-pass. */
+/** One channel's way from the sample rate to the analysis rate: low-pass, keep every n-th, high-pass. */
 final class Decimator {
 
-    private static final double HIGH_PASS_HZ = 5;
+    /** Two of them: what lies below the mains leaks into a tick's fundamental. */
+    private static final double HIGH_PASS_HZ = 30;
+
     private static final double LOUDEST = 1e9;
     private static final double QUIET = 1e-30;
 
@@ -15,6 +17,8 @@ final class Decimator {
     private final double pole;
     private double before;
     private double held;
+    private double beforeHeld;
+    private double heldTwice;
 
     Decimator(Rates rates) {
         factor = rates.factor;
@@ -50,19 +54,24 @@ final class Decimator {
             for (int i = 0; i < half; i++) {
                 sum += taps[i] * (history[end + i] + history[end + past - i]);
             }
-            held = pole * held + 0.5 * (1 + pole) * (sum - before);
+            held = quiet(pole * held + 0.5 * (1 + pole) * (sum - before));
             before = sum;
-            if (Math.abs(held) < QUIET) {
-                held = 0;
-            }
-            analysis[step++] = held;
+            heldTwice = quiet(pole * heldTwice + 0.5 * (1 + pole) * (held - beforeHeld));
+            beforeHeld = held;
+            analysis[step++] = heldTwice;
         }
         System.arraycopy(history, frames, history, 0, past);
+    }
+
+    private static double quiet(double value) {
+        return Math.abs(value) < QUIET ? 0 : value;
     }
 
     void reset() {
         Arrays.fill(history, 0);
         before = 0;
         held = 0;
+        beforeHeld = 0;
+        heldTwice = 0;
     }
 }

@@ -43,10 +43,12 @@ final class InputGain {
         double w = 2 * Math.PI * frequencyHz / analysisHz;
         double c = Math.cos(w);
         double s = Math.sin(w);
-        // (1 - pole z^-1) / (half (1 - z^-1)), by the conjugate of 1 - z^-1.
-        double square = half * low * 2 * (1 - c);
-        re = ((1 - pole * c) * (1 - c) + pole * s * s) / square;
-        im = (pole * s * (1 - c) - (1 - pole * c) * s) / square;
+        // (1 - pole z^-1) / (half (1 - z^-1)), by the conjugate of 1 - z^-1; squared, for there are two.
+        double square = half * 2 * (1 - c);
+        double onceRe = ((1 - pole * c) * (1 - c) + pole * s * s) / square;
+        double onceIm = (pole * s * (1 - c) - (1 - pole * c) * s) / square;
+        re = (onceRe * onceRe - onceIm * onceIm) / low;
+        im = 2 * onceRe * onceIm / low;
     }
 
     double re() {

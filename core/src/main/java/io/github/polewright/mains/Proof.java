@@ -22,6 +22,8 @@ final class Proof {
     private static final double MOST_STRIKES = 2.5;
     private static final double GONE_SHARE = 0.7;
     private static final double GONE_SECONDS = 0.5;
+    private static final double USUAL_SECONDS = 5;
+    private static final double DROPPED_SHARE = 0.4;
     private static final double LOWEST_HZ = 44.5;
     private static final double HIGHEST_HZ = 65.5;
 
@@ -32,6 +34,7 @@ final class Proof {
     private double failSeconds;
     private double goneSeconds;
     private double steadyPower;
+    private double usualPower;
     private double lowestHz;
     private double highestHz;
     private double strikes;
@@ -40,6 +43,7 @@ final class Proof {
     private boolean jumping;
     private boolean jumped;
     private boolean matched;
+    private boolean dropped;
 
     Proof(Presence presence) {
         this.presence = presence;
@@ -66,9 +70,11 @@ final class Proof {
         failSeconds = 0;
         goneSeconds = 0;
         steadyPower = 0;
+        usualPower = 0;
         strikes = 0;
         jumped = false;
         matched = false;
+        dropped = false;
         lowestHz = frequencyHz;
         highestHz = frequencyHz;
     }
@@ -76,6 +82,11 @@ final class Proof {
     /** The first second held the lines as they are now. */
     void match(boolean matches) {
         matched = matches;
+    }
+
+    /** Whether lines are followed that have lost most of their power lately: another mains may have taken over. */
+    boolean hasDropped() {
+        return holds() && dropped;
     }
 
     /** A trial that has not had its quick proof can be replaced. */
@@ -145,6 +156,9 @@ final class Proof {
 
     private void following(double seconds, boolean jump, double frequencyHz) {
         sinceProof = 0;
+        double power = presence.clearPower();
+        usualPower = Math.max(power, usualPower - usualPower * seconds / USUAL_SECONDS);
+        dropped = power < DROPPED_SHARE * usualPower;
         sinceJump = jump ? 0 : sinceJump + seconds;
         boolean strike = jump && !jumping;
         jumping = sinceJump < JUMP_SECONDS;

@@ -136,6 +136,9 @@ final class Tracker {
         if (proof.state() == MainsState.HOLDING && !isSilent()) {
             return away > NEAR_RIVAL_HZ;
         }
+        if (proof.hasDropped() && !isSilent()) {
+            return away > RIVAL_HZ;
+        }
         if (!proof.isSlow() || TemperedNotes.centsAway(frequencyHz) < NOTE_CENTS) {
             return false;
         }

@@ -102,6 +102,15 @@ final class LineBank {
         return re[i] * re[i] + im[i] * im[i];
     }
 
+    /** Squared amplitude of a channel's strongest line. */
+    double strongest(int channel) {
+        double most = 0;
+        for (int i = channel * lines; i < (channel + 1) * lines; i++) {
+            most = Math.max(most, power(i));
+        }
+        return most;
+    }
+
     /** Mean power of all lines of all channels. */
     double meanPower() {
         double sum = 0;

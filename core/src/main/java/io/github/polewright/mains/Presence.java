@@ -17,6 +17,11 @@ final class Presence {
     private static final double KNOWN = 4;
     private static final double LEAST_SHARE = 0.12;
 
+    /** Lines weaker than this beside a channel's strongest one, in power, are left alone. */
+    private static final double LEAST_RELATIVE = 1e-6;
+    /** Lines weaker than this prove nothing: a pure tone leaks as much into the others while the frequency is off. */
+    private static final double LEAST_PROOF = 1e-3;
+
     /** Smoothed squared spread of the amplitude a tick: the programme. */
     final double[] spread;
 
@@ -34,6 +39,7 @@ final class Presence {
     private final double[] goneSeconds;
     private final double[] cosine;
     private final double[] sine;
+    private final double[] least;
     private int ticks;
 
     Presence(LineBank bank, Amplitudes amplitudes) {
@@ -48,6 +54,7 @@ final class Presence {
         re = new double[size];
         im = new double[size];
         goneSeconds = new double[size];
+        least = new double[bank.channels];
         cosine = new double[bank.lines];
         sine = new double[bank.lines];
     }
@@ -72,6 +79,9 @@ final class Presence {
         double keep = Math.max(1.0 / ticks, Math.min(1, seconds / SMOOTH_SECONDS));
         double effective = Math.min(ticks, 2 * SMOOTH_SECONDS / seconds);
         Powers.of(-radians, cosine, sine);
+        for (int c = 0; c < bank.channels; c++) {
+            least[c] = LEAST_RELATIVE * bank.strongest(c);
+        }
         for (int k = 0; k < bank.lines; k++) {
             for (int i = k; i < bank.size(); i += bank.lines) {
                 smooth(i, keep);
@@ -100,8 +110,9 @@ final class Presence {
         boolean missing = power < UNSEEN * variance || power < LEAST_SHARE * remembered[i];
         boolean wouldShow = UNSEEN * variance < remembered[i] / 4;
         goneSeconds[i] = missing && wouldShow ? goneSeconds[i] + seconds : 0;
-        open[i] = ticks > 4 && power > SEEN * variance && power > 0;
-        boolean learnt = ticks > 4 && goneSeconds[i] == 0 && known > KNOWN * amplitudes.variance(i) && known > 0;
+        boolean counts = ticks > 4 && known > least[i / bank.lines];
+        open[i] = counts && power > SEEN * variance && power > 0;
+        boolean learnt = counts && goneSeconds[i] == 0 && known > KNOWN * amplitudes.variance(i);
         clear[i] = open[i] || learnt;
         if (clear[i]) {
             double keep = remembered[i] > 0 ? Math.min(1, seconds / REMEMBER_SECONDS) : 1;
@@ -141,7 +152,7 @@ final class Presence {
     boolean clearLine(int line) {
         boolean any = false;
         for (int i = line; i < bank.size(); i += bank.lines) {
-            any |= clear[i];
+            any |= clear[i] && bank.power(i) > LEAST_PROOF / LEAST_RELATIVE * least[i / bank.lines];
         }
         return any;
     }

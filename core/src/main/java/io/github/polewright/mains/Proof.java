@@ -125,7 +125,7 @@ final class Proof {
         lowestHz = settling ? frequencyHz : Math.min(lowestHz, frequencyHz);
         highestHz = settling ? frequencyHz : Math.max(highestHz, frequencyHz);
         int lines = presence.clearLines();
-        failSeconds = lines >= 2 ? 0 : failSeconds + seconds;
+        failSeconds = lines >= 1 ? 0 : failSeconds + seconds;
         if (failSeconds > FAIL_SECONDS) {
             state = MainsState.SEARCHING;
             return;

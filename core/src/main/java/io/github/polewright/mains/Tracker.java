@@ -10,6 +10,7 @@ final class Tracker {
     private static final double JUMP_SHARE = 0.25;
     private static final double RIVAL_HZ = 1;
     private static final double NEAR_RIVAL_HZ = 0.3;
+    private static final double SURE_HZ = 0.05;
     private static final double NOTE_CENTS = 10;
     private static final int MATCH_TICKS = 10;
     /** So many slabs of exact zeros are silence before a tick can tell. */
@@ -142,7 +143,7 @@ final class Tracker {
         if (!proof.isSlow() || TemperedNotes.centsAway(frequencyHz) < NOTE_CENTS) {
             return false;
         }
-        return away > RIVAL_HZ || (away > NEAR_RIVAL_HZ && presence.clearLines() < 3);
+        return away > RIVAL_HZ || (away > NEAR_RIVAL_HZ && presence.clearLines() < 3 && loop.uncertaintyHz() > SURE_HZ);
     }
 
     private void startTrial(double frequencyHz) {

@@ -1,6 +1,10 @@
 package io.github.polewright.live;
 
+import io.github.polewright.Cascade;
+import io.github.polewright.retune.Bucket;
+import io.github.polewright.retune.Walk;
 import io.github.polewright.slab.Slab;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Runs all sections over a slab: keeps the states, chooses the loops, walks the coefficients. The audio thread's own.
@@ -15,20 +19,30 @@ final class Engine {
     private final int sections;
     private final Slab slab;
     private final double[] samples;
-    private final Course course;
+    private final Walk walk;
+    private final OutputGain gain;
+    private final @Nullable Rows rows;
     private final double[] states;
+    /** One section's coefficients, frame by frame, while they glide. */
+    private final double[][] moving = new double[5][Slab.FRAMES];
+
+    private final double[] ticks = new double[Slab.FRAMES];
     private double[] old;
     private double[] next;
+    private boolean signalsLead;
     private long clock;
     private long restarts;
 
-    Engine(Form form, int channels, int sections, Path initial) {
+    /** Starts silent and settled on a cascade of one section a slot. */
+    Engine(Form form, int channels, Cascade start, int gainFrames) {
         this.transposed = form == Form.TRANSPOSED_DIRECT_FORM_2;
         this.channels = channels;
-        this.sections = sections;
+        this.sections = start.sectionCount();
         this.slab = new Slab(channels);
         this.samples = slab.samples();
-        this.course = new Course(initial, 5 * sections);
+        this.walk = new Walk(start, Bucket.USUAL_LIMIT);
+        this.gain = new OutputGain(gainFrames);
+        this.rows = Rows.pay(channels, sections) ? new Rows(transposed, channels, sections) : null;
         this.states = new double[2 * sections * channels];
         this.old = new double[2 * (sections + 1) * channels];
         this.next = new double[old.length];
@@ -38,8 +52,12 @@ final class Engine {
         return slab;
     }
 
-    Course course() {
-        return course;
+    Walk walk() {
+        return walk;
+    }
+
+    OutputGain gain() {
+        return gain;
     }
 
     /** Channels that were set back to silence, since their state was no longer finite. */
@@ -55,36 +73,60 @@ final class Engine {
         clock = 0;
     }
 
-    /** Frames that may be run in one piece: to the next multiple of 64, to the next knot, or to the block's end. */
-    int pieceFrames(int left) {
+    /** Begins a piece: to the next multiple of 64, to the next knot, or to the block's end. It is to be run whole. */
+    int nextPiece(int left) {
         int toSlabEnd = Slab.FRAMES - (int) (clock & (Slab.FRAMES - 1));
-        return Math.min(Math.min(left, toSlabEnd), course.framesToKnot());
+        return walk.next(Math.min(left, toSlabEnd));
     }
 
     /** Filters what the slab holds, in place. */
     void run(int frames) {
         int untilGuard = Guard.framesUntil(clock);
-        if (course.gliding()) {
-            glide(frames, untilGuard);
-        } else if (transposed) {
+        boolean steadyTransposed = transposed && walk.isSettled();
+        if (steadyTransposed && signalsLead) {
+            statesFromSignals();
+        }
+        signalsLead = !steadyTransposed;
+        if (rows != null) {
+            runRows(rows, frames, untilGuard, steadyTransposed);
+        } else if (steadyTransposed) {
             runTransposed(frames, untilGuard);
-        } else {
+        } else if (walk.isStandingStill()) {
             runDirect(frames, untilGuard);
+        } else {
+            glide(frames, untilGuard);
         }
         double[] swap = old;
         old = next;
         next = swap;
-        if (course.gliding() && course.advance(frames) && transposed) {
-            statesFromSignals();
-        }
+        amplify(frames);
+        walk.arrive();
         clock += frames;
         if ((clock & (Slab.FRAMES - 1)) == 0) {
             contain();
         }
     }
 
+    private void amplify(int frames) {
+        for (int channel = 0; channel < channels; channel++) {
+            gain.apply(samples, channel * Slab.FRAMES, frames);
+        }
+        gain.advance(frames);
+    }
+
+    private void runRows(Rows all, int frames, int untilGuard, boolean steadyTransposed) {
+        double[] c = walk.bases();
+        if (steadyTransposed) {
+            all.transposed(samples, frames, untilGuard, c, states, old, next);
+        } else if (walk.isStandingStill()) {
+            all.direct(samples, frames, untilGuard, c, old, next);
+        } else {
+            all.glide(samples, frames, untilGuard, c, walk.steps(), walk.position(), old, next);
+        }
+    }
+
     private void runDirect(int frames, int untilGuard) {
-        double[] c = course.coefficients();
+        double[] c = walk.bases();
         int channel = 0;
         for (; channel + 2 <= channels; channel += 2) {
             int from = channel * Slab.FRAMES;
@@ -105,8 +147,16 @@ final class Engine {
     }
 
     private void runTransposed(int frames, int untilGuard) {
-        double[] c = course.coefficients();
-        for (int channel = 0; channel < channels; channel++) {
+        double[] c = walk.bases();
+        int channel = 0;
+        for (; channel + 2 <= channels; channel += 2) {
+            int from = channel * Slab.FRAMES;
+            for (int section = 0; section < sections; section++) {
+                RawTransposed.stereo(
+                        samples, from, frames, untilGuard, c, section, states, old, next, channels, channel);
+            }
+        }
+        if (channel < channels) {
             int from = channel * Slab.FRAMES;
             int section = 0;
             for (; section + 2 <= sections; section += 2) {
@@ -119,47 +169,33 @@ final class Engine {
     }
 
     private void glide(int frames, int untilGuard) {
-        double[] c = course.coefficients();
-        double[] step = course.step();
-        int passed = course.passed();
-        for (int section = 0; section < sections; section++) {
-            int channel = 0;
-            for (; channel + 2 <= channels; channel += 2) {
-                RawGlide.stereo(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        double[] c = walk.bases();
+        double[] step = walk.steps();
+        int passed = walk.position();
+        int last = channels - 1;
+        if (channels > 1) {
+            for (int i = 0; i < frames; i++) {
+                ticks[i] = passed + 1 + i;
             }
-            if (channel < channels) {
-                RawGlide.one(
-                        samples,
-                        channel * Slab.FRAMES,
-                        frames,
-                        untilGuard,
-                        c,
-                        step,
-                        passed,
-                        section,
-                        old,
-                        next,
-                        channels,
-                        channel);
+        }
+        for (int section = 0; section < sections; section++) {
+            if (channels > 1) {
+                RawGlide.coefficients(moving, ticks, frames, c, step, section);
+            }
+            for (int channel = 0; channel < last; channel += 2) {
+                int from = channel * Slab.FRAMES;
+                RawGlide.stereo(samples, from, frames, untilGuard, moving, section, old, next, channels, channel);
+            }
+            if ((channels & 1) != 0) {
+                int from = last * Slab.FRAMES;
+                RawGlide.one(samples, from, frames, untilGuard, c, step, passed, section, old, next, channels, last);
             }
         }
     }
 
     /** The states of transposed direct form II that belong to the signals' last two samples; no division. */
     private void statesFromSignals() {
-        double[] c = course.coefficients();
+        double[] c = walk.bases();
         for (int section = 0; section < sections; section++) {
             int k = 5 * section;
             for (int channel = 0; channel < channels; channel++) {

@@ -2,12 +2,13 @@ package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.retune.Glide;
+import io.github.polewright.retune.Pace;
 import io.github.polewright.slab.Ranges;
 import io.github.polewright.slab.Slab;
 import java.nio.FloatBuffer;
 import java.util.Objects;
 import java.util.concurrent.atomic.AtomicLong;
-import java.util.concurrent.atomic.AtomicReference;
 
 /**
  * A cascade that runs: filters blocks of samples on the audio thread and takes a new cascade from any other thread
@@ -28,28 +29,36 @@ import java.util.concurrent.atomic.AtomicReference;
  */
 public final class LiveCascade {
 
+    private static final double GAIN_SECONDS = 0.05;
+    private static final double MOST_GAIN_DB = 120;
+    private static final double MOST_WARM_UP_SECONDS = 600;
+
     private final double sampleRateHz;
     private final int channels;
     private final int mostSections;
-    private final int rampFrames;
+    private final Pace pace;
+    private final Form form;
     private final Engine engine;
     private final Slab slab;
-    private final AtomicReference<Path> slot;
-    private final AtomicLong framesLeft = new AtomicLong();
-    private final AtomicLong adopted = new AtomicLong();
+    private final Orders orders;
+    private final StatusBoard board = new StatusBoard();
     private final AtomicLong replacedInputs = new AtomicLong();
     private final AtomicLong replacedOutputs = new AtomicLong();
     private final AtomicLong restarts = new AtomicLong();
+    private Order order;
+    private long adopted;
 
-    LiveCascade(Cascade cascade, int channels, Form form, int mostSections, int rampFrames) {
+    LiveCascade(Cascade cascade, int channels, Form form, int mostSections, Pace pace) {
         this.sampleRateHz = cascade.sampleRateHz();
         this.channels = channels;
         this.mostSections = mostSections;
-        this.rampFrames = rampFrames;
-        Path initial = new Path(0, new int[] {1}, new double[][] {coefficients(cascade)});
-        this.engine = new Engine(form, channels, mostSections, initial);
+        this.pace = pace;
+        this.form = form;
+        Cascade slots = Fit.inSlots(cascade, mostSections);
+        this.orders = new Orders(slots);
+        this.order = orders.latestAcquire();
+        this.engine = new Engine(form, channels, slots, (int) Math.max(1, Math.round(GAIN_SECONDS * sampleRateHz)));
         this.slab = engine.slab();
-        this.slot = new AtomicReference<>(initial);
     }
 
     /**
@@ -91,7 +100,7 @@ public final class LiveCascade {
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         begin();
         for (int done = 0; done < frames; ) {
-            int piece = engine.pieceFrames(frames - done);
+            int piece = engine.nextPiece(frames - done);
             slab.load(source, sourceOffset + done * channels, piece);
             engine.run(piece);
             slab.store(destination, destinationOffset + done * channels, piece);
@@ -117,7 +126,7 @@ public final class LiveCascade {
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         begin();
         for (int done = 0; done < frames; ) {
-            int piece = engine.pieceFrames(frames - done);
+            int piece = engine.nextPiece(frames - done);
             slab.load(source, sourceOffset + done * channels, piece);
             engine.run(piece);
             slab.store(destination, destinationOffset + done * channels, piece);
@@ -142,7 +151,7 @@ public final class LiveCascade {
         Ranges.planar(source, destination, offset, frames, channels);
         begin();
         for (int done = 0; done < frames; ) {
-            int piece = engine.pieceFrames(frames - done);
+            int piece = engine.nextPiece(frames - done);
             slab.load(source, offset + done, piece);
             engine.run(piece);
             slab.store(destination, offset + done, piece);
@@ -170,7 +179,7 @@ public final class LiveCascade {
         int sourceOffset = source.position();
         int destinationOffset = destination.position();
         for (int done = 0; done < frames; ) {
-            int piece = engine.pieceFrames(frames - done);
+            int piece = engine.nextPiece(frames - done);
             slab.load(source, sourceOffset + done * channels, piece);
             engine.run(piece);
             slab.store(destination, destinationOffset + done * channels, piece);
@@ -188,28 +197,120 @@ public final class LiveCascade {
     }
 
     /**
-     * Makes this cascade become another, in a ramp from wherever its coefficients are when the next block begins. Any
-     * thread, at any time; returns at once. The latest call wins; sections that the target lacks pass through.
+     * Lets the JVM compile the loops before the stream starts: runs a twin of this cascade on scratch samples until the
+     * cost of a block no longer falls. This cascade's states, coefficients and counters stay as they are. Without it the
+     * first blocks are some fifty times slower, and the JVM itself allocates a few hundred bytes on the audio thread
+     * when it takes up a method for compiling. Control thread; takes a core for as long as it lasts, typically half a
+     * second.
      *
-     * @param target the cascade to become
-     * @throws IllegalArgumentException if its sample rate differs, it has more sections than
-     *     {@link #mostSections()}, or it is unstable
+     * @param mostSeconds when to stop in any case, above 0 to 600
+     * @return how the cost fell
+     * @throws IllegalArgumentException if {@code mostSeconds} is out of range
      */
-    public void retune(Cascade target) {
-        checkRate(target);
-        checkFits(target, mostSections);
-        int[] frames = {rampFrames};
-        double[][] knots = {coefficients(target)};
-        slot.updateAndGet(before -> new Path(before.number() + 1, frames, knots));
+    public WarmUp warmUp(double mostSeconds) {
+        if (!(mostSeconds > 0 && mostSeconds <= MOST_WARM_UP_SECONDS)) {
+            throw new IllegalArgumentException(
+                    "mostSeconds is " + mostSeconds + "; it must be above 0 and at most " + MOST_WARM_UP_SECONDS);
+        }
+        return new Warming(twin(), System::nanoTime).run(mostSeconds);
+    }
+
+    /** A silent one of the same shape that passes everything through. */
+    LiveCascade twin() {
+        return new LiveCascade(Cascade.of(sampleRateHz, Section.PASS_THROUGH), channels, form, mostSections, pace);
     }
 
     /**
-     * Whether the coefficients stand still on the latest target, as of the last block. Any thread.
+     * Makes this cascade become another in the default glide: {@link Glide#sweeping} at the pace this was built with,
+     * {@link Pace#SINGLE} unless said. Any thread, at any time; lock-free. The latest call wins, and the next block
+     * begins it from wherever the coefficients are; sections that the target lacks pass through.
+     *
+     * @param target the cascade to become
+     * @return the glide that was handed over, with its certificates
+     * @throws IllegalArgumentException if its sample rate differs, it has more sections than
+     *     {@link #mostSections()}, or it is unstable or too near to it for a glide that ends
+     */
+    public Glide retune(Cascade target) {
+        return retune(target, pace);
+    }
+
+    /**
+     * Makes this cascade become another at a pace of its own; never faster than is certified. Otherwise as
+     * {@link #retune(Cascade)}.
+     *
+     * @param target the cascade to become
+     * @param chosen how long and how evenly
+     * @return the glide that was handed over
+     * @throws IllegalArgumentException as {@link #retune(Cascade)}
+     */
+    public Glide retune(Cascade target, Pace chosen) {
+        Objects.requireNonNull(chosen, "chosen");
+        Fit.checkRate(target, sampleRateHz);
+        Fit.check(target, mostSections);
+        return orders.retune(target, chosen);
+    }
+
+    /**
+     * Hands over a glide prepared elsewhere. Its sections take the slots of the running ones nearest to where it begins.
+     * Otherwise as {@link #retune(Cascade)}.
+     *
+     * @param glide the glide
+     * @return the glide as handed over, its sections in this cascade's slots
+     * @throws IllegalArgumentException if its sample rate differs or it needs more sections than
+     *     {@link #mostSections()}
+     */
+    public Glide retune(Glide glide) {
+        return orders.retune(Objects.requireNonNull(glide, "glide"));
+    }
+
+    /**
+     * Fades all sections out until the input comes out unchanged but for the output gain, or back in. Targets handed
+     * over meanwhile are kept and heard afterwards. Any thread, at any time; lock-free.
+     *
+     * @param on whether to bypass the sections
+     */
+    public void bypass(boolean on) {
+        orders.bypass(on);
+    }
+
+    /**
+     * Moves a gain behind the sections, which is 0 dB at first, within 50 ms. Any thread, at any time; lock-free.
+     *
+     * @param gainDb decibels, at most 120; negative infinity is silence
+     * @throws IllegalArgumentException if {@code gainDb} is NaN or above 120
+     */
+    public void outputGain(double gainDb) {
+        if (!(gainDb <= MOST_GAIN_DB)) {
+            throw new IllegalArgumentException("gainDb is " + gainDb + "; it must be at most " + MOST_GAIN_DB);
+        }
+        orders.gain(Math.pow(10, gainDb / 20));
+    }
+
+    /**
+     * Whether the coefficients and the output gain stand still on the latest target, as of the last block. Any thread.
      *
      * @return false while a target waits for the next block or a glide is under way
      */
     public boolean isSettled() {
-        return slot.getAcquire().number() == adopted.getAcquire() && framesLeft.getAcquire() == 0;
+        return board.isSettledAcquire(orders.latestAcquire());
+    }
+
+    /**
+     * How far retunes have got, as of the last block. Any thread; allocates its answer.
+     *
+     * @return the figures
+     */
+    public RetuneStatus retuneStatus() {
+        return board.readAcquire(orders.latestAcquire());
+    }
+
+    /**
+     * The cascade that the latest retune asked for, whether it has been reached or not. Any thread.
+     *
+     * @return one section for each of {@link #mostSections()}; free ones pass through
+     */
+    public Cascade target() {
+        return orders.latestAcquire().wish();
     }
 
     /**
@@ -269,51 +370,22 @@ public final class LiveCascade {
     }
 
     private void begin() {
-        Path latest = slot.getAcquire();
-        if (latest != engine.course().path()) {
-            engine.course().adopt(latest);
+        Order latest = orders.latestAcquire();
+        if (latest.number() != order.number()) {
+            if (latest.glideNumber() != order.glideNumber()) {
+                engine.walk().adopt(latest.glide());
+            }
+            engine.gain().moveTo(latest.gain());
+            order = latest;
+            adopted++;
+            orders.adoptedRelease(latest);
         }
     }
 
     private void end() {
-        framesLeft.setRelease(engine.course().framesLeft());
-        adopted.setRelease(engine.course().path().number());
+        board.writeRelease(engine.walk(), engine.gain().framesLeft(), adopted, order.number());
         replacedInputs.setRelease(slab.replacedInputs());
         replacedOutputs.setRelease(slab.replacedOutputs());
         restarts.setRelease(engine.restarts());
-    }
-
-    private void checkRate(Cascade target) {
-        if (target.sampleRateHz() != sampleRateHz) {
-            throw new IllegalArgumentException(
-                    "target's sampleRateHz is " + target.sampleRateHz() + "; it must be " + sampleRateHz);
-        }
-    }
-
-    static void checkFits(Cascade cascade, int mostSections) {
-        Objects.requireNonNull(cascade, "cascade");
-        if (cascade.sectionCount() > mostSections) {
-            throw new IllegalArgumentException(
-                    "the cascade has " + cascade.sectionCount() + " sections; it must have 1 to " + mostSections);
-        }
-        for (int i = 0; i < cascade.sectionCount(); i++) {
-            if (!cascade.section(i).isStable()) {
-                throw new IllegalArgumentException("section " + i + " is " + cascade.section(i)
-                        + "; it must be stable (|a2| < 1 and |a1| < 1 + a2)");
-            }
-        }
-    }
-
-    private double[] coefficients(Cascade cascade) {
-        double[] coefficients = new double[5 * mostSections];
-        for (int i = 0; i < mostSections; i++) {
-            Section section = i < cascade.sectionCount() ? cascade.section(i) : Section.PASS_THROUGH;
-            coefficients[5 * i] = section.b0();
-            coefficients[5 * i + 1] = section.b1();
-            coefficients[5 * i + 2] = section.b2();
-            coefficients[5 * i + 3] = section.a1();
-            coefficients[5 * i + 4] = section.a2();
-        }
-        return coefficients;
     }
 }

@@ -1,6 +1,7 @@
 package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
+import io.github.polewright.retune.Pace;
 import java.util.Objects;
 
 /**
@@ -8,7 +9,6 @@ import java.util.Objects;
  */
 public final class LiveCascadeBuilder {
 
-    private static final double DEFAULT_RAMP_SECONDS = 0.05;
     private static final int MOST_CHANNELS = 1024;
     private static final int MOST_SECTIONS = 1024;
 
@@ -16,12 +16,11 @@ public final class LiveCascadeBuilder {
     private int channels = 1;
     private Form form = Form.DIRECT_FORM_1;
     private int mostSections;
-    private int rampFrames;
+    private Pace pace = Pace.SINGLE;
 
     LiveCascadeBuilder(Cascade cascade) {
         this.cascade = Objects.requireNonNull(cascade, "cascade");
         this.mostSections = cascade.sectionCount();
-        this.rampFrames = (int) Math.max(1, Math.round(DEFAULT_RAMP_SECONDS * cascade.sampleRateHz()));
     }
 
     /**
@@ -60,14 +59,13 @@ public final class LiveCascadeBuilder {
     }
 
     /**
-     * The frames a retune takes; 50 ms unless said.
+     * How long and how evenly a retune glides that says nothing else; {@link Pace#SINGLE} unless said.
      *
-     * @param frames 1 to 2^24
+     * @param choice the pace; a glide is never faster than is certified
      * @return this
-     * @throws IllegalArgumentException if {@code frames} is out of range
      */
-    public LiveCascadeBuilder rampFrames(int frames) {
-        rampFrames = inRange("rampFrames", frames, 1, 1 << 24);
+    public LiveCascadeBuilder pace(Pace choice) {
+        pace = Objects.requireNonNull(choice, "choice");
         return this;
     }
 
@@ -78,9 +76,9 @@ public final class LiveCascadeBuilder {
      * @throws IllegalArgumentException if the cascade is unstable
      */
     public LiveCascade build() {
-        LiveCascade.checkFits(cascade, mostSections);
+        Fit.check(cascade, mostSections);
         Rehearsal.held();
-        return new LiveCascade(cascade, channels, form, mostSections, rampFrames);
+        return new LiveCascade(cascade, channels, form, mostSections, pace);
     }
 
     private static int inRange(String name, int value, int least, int most) {

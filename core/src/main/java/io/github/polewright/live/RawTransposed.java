@@ -2,6 +2,8 @@ package io.github.polewright.live;
 
 import static io.github.polewright.live.Arithmetic.mulAdd;
 
+import io.github.polewright.slab.Slab;
+
 /**
  * The steady loops of transposed direct form II. With {@code e1 = b1 - a1 b0} and {@code e2 = b2 - a2 b0} its two
  * states obey {@code y = b0 x + s1}, {@code s1' = -a1 s1 + e1 x + s2}, {@code s2' = -a2 s1 + e2 x}. Here the second is
@@ -111,6 +113,61 @@ final class RawTransposed {
         next[h + 2 * channels] = y1;
         next[h + 3 * channels] = y2;
         keepTail(x, from, frames, old, next, h + 4 * channels, channels);
+    }
+
+    /** Two channels, one section. */
+    static void stereo(
+            double[] x,
+            int from,
+            int frames,
+            int untilGuard,
+            double[] c,
+            int section,
+            double[] s,
+            double[] old,
+            double[] next,
+            int channels,
+            int channel) {
+        int k = 5 * section;
+        double b0 = c[k], a1 = -c[k + 3], a2 = -c[k + 4];
+        double e1 = mulAdd(a1, b0, c[k + 1]), e2 = mulAdd(a2, b0, c[k + 2]);
+        int h = 2 * section * channels + channel, g = h + 1;
+        double w1 = s[h], w2 = s[h + channels], v1 = s[g], v2 = s[g + channels];
+        double x1 = old[h], u1 = old[g];
+        keepTail(x, from, frames, old, next, h, channels);
+        keepTail(x, from + Slab.FRAMES, frames, old, next, g, channels);
+        int i = from, end = from + frames, guard = from + untilGuard;
+        while (i < end) {
+            for (int stop = Math.min(end, guard); i < stop; i++) {
+                double in = x[i];
+                x[i] = mulAdd(b0, in, w1);
+                double w = mulAdd(a1, w1, mulAdd(a2, w2, mulAdd(e1, in, e2 * x1)));
+                w2 = w1;
+                w1 = w;
+                x1 = in;
+                in = x[i + Slab.FRAMES];
+                x[i + Slab.FRAMES] = mulAdd(b0, in, v1);
+                w = mulAdd(a1, v1, mulAdd(a2, v2, mulAdd(e1, in, e2 * u1)));
+                v2 = v1;
+                v1 = w;
+                u1 = in;
+            }
+            if (i == guard) {
+                guard += Guard.FRAMES;
+                if (Guard.tiny(w1, w2)) {
+                    w1 = w2 = 0;
+                }
+                if (Guard.tiny(v1, v2)) {
+                    v1 = v2 = 0;
+                }
+            }
+        }
+        s[h] = w1;
+        s[h + channels] = w2;
+        s[g] = v1;
+        s[g + channels] = v2;
+        keepTail(x, from, frames, old, next, h + 2 * channels, channels);
+        keepTail(x, from + Slab.FRAMES, frames, old, next, g + 2 * channels, channels);
     }
 
     /** Keeps the last two samples of a stage that the slab still holds. */

@@ -147,7 +147,7 @@ class BadInputTest {
         Cascade rate = Cascade.of(44_100, Section.PASS_THROUGH);
         Cascade unstable = Designs.cascade(Section.PASS_THROUGH, Section.of(1, 0, 0, -2.5, 1.5));
         Cascade edge = Designs.cascade(Section.of(1, 0, 0, 0, 1));
-        add(calls, "null target", NULL, live -> live.retune(null));
+        add(calls, "null target", NULL, live -> live.retune((Cascade) null));
         add(calls, "other rate", ILLEGAL, live -> live.retune(rate), "44100", "48000");
         add(calls, "too long", ILLEGAL, live -> live.retune(Designs.mixed(1, 5)), "5 sections", "4");
         add(calls, "unstable", ILLEGAL, live -> live.retune(unstable), "section 1", "-2.5", "stable", "|a2| < 1");

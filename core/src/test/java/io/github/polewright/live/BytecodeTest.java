@@ -25,10 +25,13 @@ class BytecodeTest {
 
     /** Bounded in time, and neither locking, allocating nor blocking. */
     private static final Set<String> ALLOWED = Set.of(
+            "java/lang/Double.doubleToRawLongBits",
             "java/lang/Math.abs",
+            "java/lang/Math.ceil",
             "java/lang/Math.fma",
             "java/lang/Math.max",
             "java/lang/Math.min",
+            "java/lang/Math.sqrt",
             "java/lang/System.arraycopy",
             "java/nio/FloatBuffer.get",
             "java/nio/FloatBuffer.put",
@@ -40,7 +43,8 @@ class BytecodeTest {
             "java/nio/ByteOrder.nativeOrder",
             "java/util/Arrays.fill",
             "java/util/concurrent/atomic/AtomicLong.setRelease",
-            "java/util/concurrent/atomic/AtomicReference.getAcquire");
+            "java/util/concurrent/atomic/AtomicReference.getAcquire",
+            "java/util/concurrent/atomic/AtomicReference.setRelease");
 
     /** What a refusal may call besides, for its message. */
     private static final String TEXT = "java/lang/String.valueOf";

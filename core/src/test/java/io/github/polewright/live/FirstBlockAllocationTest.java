@@ -20,18 +20,29 @@ import org.junit.jupiter.api.Test;
  */
 class FirstBlockAllocationTest {
 
+    /** The JVM puts an object down to the thread when it throws compiled code away; a class is loaded in every one. */
+    private static final int ATTEMPTS = 5;
+
     @Test
     void firstBlockAndFirstGlideAllocateNothing() throws IOException, ReflectiveOperationException {
         URL[] path = Arrays.stream(System.getProperty("java.class.path").split(File.pathSeparator))
                 .map(FirstBlockAllocationTest::url)
                 .toArray(URL[]::new);
-        try (URLClassLoader fresh = new URLClassLoader(path, ClassLoader.getPlatformClassLoader())) {
-            for (int form = 0; form < Form.values().length; form++) {
-                LongSupplier first = (LongSupplier) fresh.loadClass(First.class.getName())
-                        .getDeclaredConstructor(int.class)
-                        .newInstance(form);
-                assertEquals(0, first.getAsLong(), "bytes, with " + Form.values()[form]);
+        for (int form = 0; form < Form.values().length; form++) {
+            long least = Long.MAX_VALUE;
+            for (int attempt = 0; attempt < ATTEMPTS && least > 0; attempt++) {
+                least = Math.min(least, bytes(path, form));
             }
+            assertEquals(0, least, "bytes, with " + Form.values()[form]);
+        }
+    }
+
+    private static long bytes(URL[] path, int form) throws IOException, ReflectiveOperationException {
+        try (URLClassLoader fresh = new URLClassLoader(path, ClassLoader.getPlatformClassLoader())) {
+            LongSupplier first = (LongSupplier) fresh.loadClass(First.class.getName())
+                    .getDeclaredConstructor(int.class)
+                    .newInstance(form);
+            return first.getAsLong();
         }
     }
 

@@ -161,9 +161,10 @@ class GuardTest {
         }
         assertEquals(0, RoundingBound.peak(out));
         Rig.settle(live);
-        double[] expected = Rig.impulseResponse(Rig.live(Designs.mixed(32, 5), 1, form), 0, FRESH);
         live.retune(Designs.mixed(32, 5));
         Rig.settle(live);
+        assertTrue(Rig.heads(live, Designs.mixed(32, 5)));
+        double[] expected = Rig.impulseResponse(Rig.twin(live, form), 0, FRESH);
         assertArrayEquals(expected, Rig.impulseResponse(live, 0, FRESH));
     }
 

@@ -66,7 +66,8 @@ class RetunePropertyTest {
             live.retune(target);
             assertFalse(live.isSettled());
             Rig.settle(live);
-            LiveCascade fresh = Rig.live(target, 2, form, 6);
+            assertTrue(Rig.heads(live, target));
+            LiveCascade fresh = Rig.twin(live, form);
             for (int channel = 0; channel < 2; channel++) {
                 assertArrayEquals(
                         Rig.impulseResponse(fresh, channel, 2_000),

@@ -1,6 +1,7 @@
 package io.github.polewright.live;
 
 import io.github.polewright.Cascade;
+import io.github.polewright.Section;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.SplittableRandom;
@@ -57,6 +58,24 @@ final class Rig {
         double[] out = new double[in.length];
         live.process(in, 0, out, 0, in.length);
         return out;
+    }
+
+    /** A fresh live cascade of what another one was told to become, its sections in the same slots. */
+    static LiveCascade twin(LiveCascade live, Form form) {
+        return live(live.target(), live.channels(), form, live.mostSections());
+    }
+
+    /** Whether a live cascade was told to become a certain one: a retune may put its sections into other slots. */
+    static boolean heads(LiveCascade live, Cascade wished) {
+        return sorted(live.target()).equals(sorted(wished));
+    }
+
+    private static List<String> sorted(Cascade cascade) {
+        return cascade.sections().stream()
+                .filter(section -> !section.equals(Section.PASS_THROUGH))
+                .map(Section::toString)
+                .sorted()
+                .toList();
     }
 
     /** Feeds silence until the cascade has settled. */

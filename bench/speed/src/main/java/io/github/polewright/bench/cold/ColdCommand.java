@@ -50,9 +50,9 @@ public final class ColdCommand implements Callable<Integer> {
 
     @Option(
             names = "--warm-millis",
-            defaultValue = "1000",
+            defaultValue = "5000",
             paramLabel = "N",
-            description = "What the warm-up may take (${DEFAULT-VALUE}).")
+            description = "What the warm-up may take at most (${DEFAULT-VALUE}).")
     private long warmMillis;
 
     @Option(

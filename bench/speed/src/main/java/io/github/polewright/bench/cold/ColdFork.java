@@ -9,8 +9,6 @@ import io.github.polewright.bench.workload.Motion;
 import io.github.polewright.bench.workload.Samples;
 import io.github.polewright.bench.workload.Signal;
 import io.github.polewright.bench.workload.Tape;
-import io.github.polewright.bench.workload.WarmUp;
-import java.time.Duration;
 import java.util.Objects;
 import java.util.concurrent.Callable;
 import org.jspecify.annotations.Nullable;
@@ -48,7 +46,7 @@ public final class ColdFork implements Callable<Integer> {
         LiveRig rig = new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
         long start = System.nanoTime();
         if (warmMillis > 0) {
-            WarmUp.of(chain, Samples.FLOAT, Duration.ofMillis(warmMillis));
+            rig.live().warmUp(warmMillis / 1e3);
         }
         double warmUpMillis = (System.nanoTime() - start) / 1e6;
         command.commandLine().getOut().print(Json.text(new ColdTimes(warmUpMillis, play(rig))));

@@ -9,9 +9,13 @@ import java.lang.management.ThreadMXBean;
 /** A callback at wall-clock pace. Its loop allocates nothing unless the rig does. */
 final class AudioThread extends Thread {
 
+    /** More than the calls after which the JVM's last compiler takes up a method. */
+    private static final int REHEARSED_BLOCKS = 12_000;
+
     private final Rig rig;
     private final long endNanos;
     private final long periodNanos;
+    private final Rig rehearsed;
     private final Lateness lateness;
     private final ThreadMXBean threads = ManagementFactory.getThreadMXBean();
     private long blocks;
@@ -19,9 +23,10 @@ final class AudioThread extends Thread {
 
     /** As sound systems do, asks for the highest priority; a JVM may ignore it, and nothing here relies on it. */
     @SuppressWarnings("ThreadPriorityCheck")
-    AudioThread(Rig rig, long endNanos) {
+    AudioThread(Rig rig, Rig rehearsed, long endNanos) {
         super("audio");
         this.rig = rig;
+        this.rehearsed = rehearsed;
         this.endNanos = endNanos;
         this.periodNanos = Math.max(1, Math.round(rig.chain().periodNanos()));
         this.lateness = new Lateness(periodNanos);
@@ -32,9 +37,7 @@ final class AudioThread extends Thread {
     @Override
     public void run() {
         boolean timed = threads.isCurrentThreadCpuTimeSupported() && threads.isThreadCpuTimeEnabled();
-        // Whatever the first calls load and link is not the loop's own.
-        Pace.until(System.nanoTime() + periodNanos);
-        onProcessor(timed);
+        rehearse(timed);
         long before = Allocation.bytesSoFar();
         long due = System.nanoTime() + periodNanos;
         while (due < endNanos) {
@@ -54,6 +57,18 @@ final class AudioThread extends Thread {
             }
         }
         allocatedBytes = Allocation.bytesSoFar() - before;
+    }
+
+    /** What the JVM allocates when it loads, links and compiles this loop itself is not the library's. */
+    private void rehearse(boolean timed) {
+        Lateness scratch = new Lateness(periodNanos);
+        for (int i = 0; i < REHEARSED_BLOCKS; i++) {
+            long now = Pace.until(System.nanoTime());
+            long on = onProcessor(timed);
+            rehearsed.block();
+            scratch.record(0, System.nanoTime() - now, Math.min(now, onProcessor(timed) - on));
+        }
+        Allocation.bytesSoFar();
     }
 
     private long onProcessor(boolean timed) {

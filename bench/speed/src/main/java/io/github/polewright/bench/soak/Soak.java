@@ -6,7 +6,6 @@ import io.github.polewright.bench.workload.Motion;
 import io.github.polewright.bench.workload.Samples;
 import io.github.polewright.bench.workload.Signal;
 import io.github.polewright.bench.workload.Tape;
-import io.github.polewright.bench.workload.WarmUp;
 import io.github.polewright.live.LiveCascade;
 import java.lang.management.GarbageCollectorMXBean;
 import java.lang.management.ManagementFactory;
@@ -20,13 +19,15 @@ final class Soak {
     private Soak() {}
 
     static SoakResult play(Chain chain, double seconds, int allocators, Duration warmUp) throws InterruptedException {
-        LiveRig rig = new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
-        WarmUp.of(chain, Samples.FLOAT, warmUp);
+        LiveRig rig = rig(chain);
+        if (!warmUp.isZero()) {
+            rig.live().warmUp(warmUp.toMillis() / 1e3);
+        }
         long collections = collections();
         long collectionMillis = collectionMillis();
         long disturbedNanos = Math.round(seconds * 1e9);
         long start = System.nanoTime();
-        AudioThread audio = new AudioThread(rig, start + disturbedNanos + Math.round(CALM_SECONDS * 1e9));
+        AudioThread audio = new AudioThread(rig, rig(chain), start + disturbedNanos + Math.round(CALM_SECONDS * 1e9));
         Disturbance disturbance = new Disturbance(rig, allocators);
         audio.start();
         Thread.sleep(Duration.ofNanos(disturbedNanos).toMillis());
@@ -45,6 +46,10 @@ final class Soak {
                 new SoakResult.Counters(
                         live.replacedInputSamples(), live.replacedOutputSamples(), live.channelRestarts()),
                 live.isSettled());
+    }
+
+    private static LiveRig rig(Chain chain) {
+        return new LiveRig(chain, new Tape(chain, Samples.FLOAT, Signal.NOISE), Motion.STEADY);
     }
 
     private static long collections() {

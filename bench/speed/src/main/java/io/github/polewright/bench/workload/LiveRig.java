@@ -2,6 +2,7 @@ package io.github.polewright.bench.workload;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.live.LiveCascade;
+import io.github.polewright.retune.Pace;
 
 /** A live cascade on a tape. */
 public final class LiveRig extends Rig {
@@ -27,10 +28,11 @@ public final class LiveRig extends Rig {
         super(chain, tape);
         this.motion = motion;
         this.targets = new Cascade[] {Combs.movedComb(chain), Combs.comb(chain)};
+        int glideFrames = motion == Motion.RAMPING ? LONG_RAMP_FRAMES : RETUNED_RAMP_FRAMES;
         this.live = LiveCascade.builder(Combs.comb(chain))
                 .channels(chain.channels())
                 .form(chain.form())
-                .rampFrames(motion == Motion.RAMPING ? LONG_RAMP_FRAMES : RETUNED_RAMP_FRAMES)
+                .pace(Pace.FOLLOWING.atLeastSeconds(glideFrames / chain.sampleRateHz()))
                 .build();
         keepMoving();
     }

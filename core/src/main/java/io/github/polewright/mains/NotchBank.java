@@ -71,6 +71,11 @@ final class NotchBank {
         return widthHz[i];
     }
 
+    /** The amplitude a notch holds: the norm that no retuning makes grow. */
+    double amplitude(int i) {
+        return Math.sqrt(tangent[i]) * Math.hypot(x1[i], x2[i]);
+    }
+
     /** Sets a line's width; the amplitude it holds stays. */
     void width(int i, double hz) {
         double before = tangent[i];

@@ -10,6 +10,7 @@ import com.google.gson.JsonParser;
 import io.github.polewright.samples.Sounds;
 import io.github.polewright.samples.Wav;
 import io.github.polewright.samples.files.Recording;
+import java.awt.image.BufferedImage;
 import java.io.IOException;
 import java.io.PrintWriter;
 import java.io.StringWriter;
@@ -22,6 +23,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.stream.Stream;
+import javax.imageio.ImageIO;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -223,7 +225,14 @@ final class CommandLineTest {
     void aReportHoldsChartsAndAPage() throws IOException {
         Path report = folder.resolve("new").resolve("report");
         assertEquals(0, run("clean", in, out, "--report", report), complained);
-        for (String name : List.of("spectra-low", "spectra-whole", "response")) {
+        assertReport(report, List.of("spectra-low", "spectra-whole", "track"));
+        Path fixed = folder.resolve("fixed");
+        assertEquals(0, run("clean", in, out, "--fixed", "--report", fixed), complained);
+        assertReport(fixed, List.of("spectra-low", "spectra-whole", "track", "response"));
+    }
+
+    private static void assertReport(Path report, List<String> names) throws IOException {
+        for (String name : names) {
             String svg = Files.readString(report.resolve(name + ".svg"));
             assertTrue(svg.contains("<svg"));
             byte[] png = Files.readAllBytes(report.resolve(name + ".png"));
@@ -231,8 +240,49 @@ final class CommandLineTest {
             assertTrue(Files.readString(report.resolve("index.html")).contains(name + ".svg"));
         }
         try (Stream<Path> files = Files.list(report)) {
-            assertEquals(7, files.count());
+            assertEquals(2 * names.size() + 2, files.count());
         }
+        BufferedImage picture = ImageIO.read(report.resolve("spectrogram.png").toFile());
+        // A line of hum stands out in the upper half and not in the lower one.
+        double above = brightness(picture, 0);
+        double below = brightness(picture, picture.getHeight() / 2);
+        assertTrue(above > below + 1, above + " above, " + below + " below");
+    }
+
+    private static double brightness(BufferedImage picture, int top) {
+        double sum = 0;
+        for (int y = top; y < top + picture.getHeight() / 2; y++) {
+            for (int x = 0; x < picture.getWidth(); x++) {
+                sum += picture.getRGB(x, y) >> 8 & 0xff;
+            }
+        }
+        return sum / picture.getWidth() / picture.getHeight() * 2;
+    }
+
+    /** Hum that wanders over half a hertz in twelve seconds, under notes: notches left where the survey has them lag. */
+    @Test
+    void followingBeatsTheFixedNotchesOnADrift() {
+        double[] notes = Sounds.noise(16_000, 24, 0.02, 9);
+        double[] sound = notes.clone();
+        for (int n = 0; n < sound.length; n++) {
+            double t = n / 16_000.0;
+            double cycles = 50.1 * t - 0.25 * Math.cos(2 * Math.PI * t / 12) * 12 / (2 * Math.PI);
+            for (int k = 1; k <= 10; k++) {
+                sound[n] += 0.05 / k * Math.sin(2 * Math.PI * k * cycles + k);
+            }
+        }
+        Wav.write(in, 16_000, 1, 24, false, sound);
+        assertEquals(0, run("clean", in, out, "--no-dc"), complained);
+        assertTrue(printed.contains("follows the mains"), printed);
+        double following = Sounds.rms(Sounds.sum(Wav.read(out), Sounds.scaled(notes, -1)));
+        assertEquals(0, run("clean", in, out, "--no-dc", "--fixed"), complained);
+        assertTrue(printed.contains("by notches"), printed);
+        double fixed = Sounds.rms(Sounds.sum(Wav.read(out), Sounds.scaled(notes, -1)));
+        double gainDb = 20 * Math.log10(fixed / following);
+        System.out.printf("hum that wanders: following leaves %.1f dB less than fixed notches%n", gainDb);
+        assertTrue(gainDb > 6, "only " + gainDb + " dB better");
+        assertEquals(0, run("survey", in), complained);
+        assertTrue(printed.contains("drift of 0.4") || printed.contains("drift of 0.5"), printed);
     }
 
     @Test

@@ -30,7 +30,7 @@ final class Amplitudes {
     Amplitudes(LineBank bank, Innovation innovation) {
         this.bank = bank;
         this.innovation = innovation;
-        variance = new double[bank.size()];
+        variance = bank.variance;
         meanRe = new double[bank.size()];
         meanIm = new double[bank.size()];
         changed = new boolean[bank.size()];

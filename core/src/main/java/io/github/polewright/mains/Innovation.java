@@ -11,6 +11,9 @@ final class Innovation {
     private static final double NOISE_SECONDS = 0.25;
     private static final double LEAST_PRIOR = 0.05;
     private static final double PRIOR_FACTOR = 4;
+    /** A line less known than this says nothing of the phase: it may be a tone beside it, which only pulls. */
+    private static final double KNOWN = 1;
+
     private static final double FLAT = 1;
 
     /** Innovation power a tick, smoothed, without the common phase error. */
@@ -87,7 +90,7 @@ final class Innovation {
         for (int k = 0; k < bank.lines; k++) {
             double order = k + 1;
             for (int i = k; i < bank.size(); i += bank.lines) {
-                if (weights[i] > 0) {
+                if (weights[i] > 0 && bank.power(i) > KNOWN * bank.variance[i]) {
                     double cross = bank.newIm[i] * bank.re[i] - bank.newRe[i] * bank.im[i];
                     double along = bank.newRe[i] * bank.re[i] + bank.newIm[i] * bank.im[i];
                     likelihood.add(k, (bank.power(i) + along) / weights[i], cross / weights[i]);
@@ -102,9 +105,9 @@ final class Innovation {
         return radians;
     }
 
-    /** One over twice the variance of {@link #radians}. */
+    /** One over twice the variance of {@link #radians}, where programme may be the same in all channels. */
     double phaseInformation() {
-        return phaseInformation;
+        return phaseInformation / bank.channels;
     }
 
     /** Common relative level error: -1 where the hum has stopped, 0 where it is as known. */
@@ -112,8 +115,8 @@ final class Innovation {
         return level;
     }
 
-    /** One over twice the variance of {@link #level}. */
+    /** One over twice the variance of {@link #level}, where programme may be the same in all channels. */
     double levelInformation() {
-        return levelInformation;
+        return levelInformation / bank.channels;
     }
 }

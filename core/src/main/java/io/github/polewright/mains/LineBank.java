@@ -15,6 +15,8 @@ final class LineBank {
     final int channels;
     final double[] re;
     final double[] im;
+    /** Error variance of each amplitude. */
+    final double[] variance;
     /** Innovation of the last tick. */
     final double[] newRe;
 
@@ -32,6 +34,7 @@ final class LineBank {
         int size = lines * channels;
         re = new double[size];
         im = new double[size];
+        variance = new double[size];
         newRe = new double[size];
         newIm = new double[size];
         sumRe = new double[size];

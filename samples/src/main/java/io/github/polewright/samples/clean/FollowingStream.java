@@ -8,7 +8,6 @@ import io.github.polewright.mains.HumRemover;
 import io.github.polewright.mains.MainsState;
 import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.survey.OpeningHum;
-import java.util.Random;
 
 /**
  * A hum remover that follows the mains by itself, and a DC notch behind it.
@@ -25,9 +24,6 @@ final class FollowingStream implements FrameFilter {
     private static final int MOST_LINES = 20;
     /** Hum near a note of the scale needs ten to be proven. */
     private static final double RUN_UP_SECONDS = 12;
-
-    /** Beside the hum: in hum without anything else the remover would take the first sounds for a change of it. */
-    private static final double RUN_UP_NOISE = 0.1;
 
     private final HumRemover remover;
     private final LiveCascade dc;
@@ -57,14 +53,10 @@ final class FollowingStream implements FrameFilter {
     /** Lets it hear what came before the recording. */
     void runUp(OpeningHum opening) {
         long frames = (long) (RUN_UP_SECONDS * sampleRateHz);
-        Random random = new Random(1);
         double[] block = new double[CleaningStream.BLOCK_FRAMES * channels];
         for (long frame = -frames; frame < 0; frame += CleaningStream.BLOCK_FRAMES) {
             int count = (int) Math.min(CleaningStream.BLOCK_FRAMES, -frame);
             opening.extend(frame, count, block);
-            for (int n = 0; n < count * channels; n++) {
-                block[n] *= 1 + RUN_UP_NOISE * random.nextGaussian();
-            }
             process(block, count);
         }
     }

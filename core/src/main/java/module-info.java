@@ -12,4 +12,5 @@ module io.github.polewright {
     exports io.github.polewright.inspect;
     exports io.github.polewright.live;
     exports io.github.polewright.retune;
+    exports io.github.polewright.tone;
 }

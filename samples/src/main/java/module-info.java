@@ -16,4 +16,6 @@ module io.github.polewright.samples {
             info.picocli;
     opens io.github.polewright.samples.survey to
             com.google.gson;
+    opens io.github.polewright.samples.tones to
+            com.google.gson;
 }

@@ -46,7 +46,7 @@ final class ForcedBound {
 
     /** One frame of input. */
     void step() {
-        norm = Math.fma(-decay, norm, norm) + injection;
+        norm = norm - decay * norm + injection;
     }
 
     /** The bound of |y| for the frame just stepped. */

@@ -83,7 +83,7 @@ public final class Glide {
 
     /**
      * A glide through a design, even in log frequency, log Q and decibels: half an octave a knot and at most 16 knots at
-     * an even pace, 32 knots at a gentle one.
+     * an even pace, 64 knots at a gentle one.
      *
      * @param design asked for each knot; the same number of sections for every setting
      * @param from the setting at the start

@@ -11,7 +11,7 @@ final class GlidePlan {
 
     static final double HOP_FRACTION = 0.7;
 
-    private static final int GENTLE_KNOTS = 32;
+    private static final int GENTLE_KNOTS = 64;
     private static final int MOST_LEGS = 16;
     private static final int LEAST_GENTLE_FRAMES = 8;
     private static final double LONGEST_FRAMES = 1 << 30;

@@ -65,8 +65,6 @@ final class RealRamp {
     }
 
     private static double chord(double a1, double a2, double d1, double d2, double from, double to) {
-        return 2
-                * Distance.asinhBound(Distance.halfSinh(
-                        Math.fma(from, d1, a1), Math.fma(from, d2, a2), Math.fma(to, d1, a1), Math.fma(to, d2, a2)));
+        return 2 * Distance.asinhBound(Distance.halfSinh(from * d1 + a1, from * d2 + a2, to * d1 + a1, to * d2 + a2));
     }
 }

@@ -51,6 +51,6 @@ public record Setting(double frequencyHz, double q, double gainDb) {
         return new Setting(
                 frequencyHz * Math.pow(other.frequencyHz / frequencyHz, share),
                 q * Math.pow(other.q / q, share),
-                Math.fma(share, other.gainDb - gainDb, gainDb));
+                share * (other.gainDb - gainDb) + gainDb);
     }
 }

@@ -89,13 +89,17 @@ final class SlotAims {
             isExchanging = true;
             return EXCHANGING;
         }
-        if (distance > 0
-                && Distance.hopFraction(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4])
-                        > GlidePlan.HOP_FRACTION) {
-            double leak = Bucket.leak(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]);
-            slowdown = Math.max(slowdown, (0.5 * distance / leak + 1) / glide.movingFrames());
+        distances[slot] = distance;
+        leaks[slot] = Bucket.leak(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]);
+        double factor = (0.5 * distance / leaks[slot] + 1) / glide.movingFrames();
+        if (factor > slowdown && !mayJump(end, at)) {
+            slowdown = factor;
         }
         return glide.isExchanged(slot) ? STRAIGHT : MIXING;
+    }
+
+    private boolean mayJump(double[] end, int at) {
+        return Distance.hopFraction(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]) <= GlidePlan.HOP_FRACTION;
     }
 
     /** The frames of one segment, for slots that have farther to go than the glide knew. */
@@ -152,7 +156,9 @@ final class SlotAims {
                 goals[i] = Knots.mix(origins[i], knot[i], share);
             }
         }
-        cost(slot);
+        if (ways[slot] != MIXING || behind > 0 || share < 1) {
+            cost(slot);
+        }
     }
 
     private void cost(int slot) {

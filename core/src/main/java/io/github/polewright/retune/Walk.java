@@ -91,6 +91,9 @@ public final class Walk {
         planned = aims.plannedFrames(next);
         walked = 0;
         isSettled = allJoined && next.isStill();
+        if (isSettled) {
+            standStill();
+        }
         return true;
     }
 
@@ -220,12 +223,17 @@ public final class Walk {
         bucket.clear();
     }
 
-    private void standStill() {
+    private void stop() {
         isWalking = false;
         isMoving = false;
         length = 0;
         done = 0;
         Arrays.fill(steps, 0);
+    }
+
+    /** Stops for some time, in which the buckets lose what sections lose that stand still. */
+    private void standStill() {
+        stop();
         for (int slot = 0; slot < slots; slot++) {
             double a1 = bases[slot * WIDTH + 3];
             double a2 = bases[slot * WIDTH + 4];
@@ -243,7 +251,7 @@ public final class Walk {
         for (int i = 0; i < bases.length; i++) {
             bases[i] += done * steps[i];
         }
-        standStill();
+        stop();
     }
 
     private void land() {
@@ -259,11 +267,7 @@ public final class Walk {
         } else {
             held += length;
         }
-        isWalking = false;
-        isMoving = false;
-        length = 0;
-        done = 0;
-        Arrays.fill(steps, 0);
+        stop();
     }
 
     /** After the wait the freed slots pass through and the exchanged ones rise, after the rise all is done. */

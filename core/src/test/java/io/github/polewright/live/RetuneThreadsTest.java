@@ -19,7 +19,7 @@ import org.junit.jupiter.params.provider.EnumSource;
 class RetuneThreadsTest {
 
     private static final int THREADS = 8;
-    private static final int RETUNES = 2_000;
+    private static final int RETUNES = 400;
     private static final int SECTIONS = 5;
 
     @ParameterizedTest

@@ -98,14 +98,14 @@ class GlideTest {
     @Test
     void gentlePaceFollowsTheSmoothstep() {
         Glide raise = Glide.along(PEAK, new Setting(1000, 1, 0), new Setting(1000, 1, 12), Pace.SINGLE);
-        assertEquals(32, raise.segmentCount());
+        assertEquals(64, raise.segmentCount());
         int elapsed = 0;
-        for (int i = 0; i <= 32; i++) {
-            double u = i / 32.0;
+        for (int i = 0; i <= 64; i++) {
+            double u = i / 64.0;
             double gainDb = 12 * (u * u * (3 - 2 * u));
             assertKnot(Sections.peak(1000, 1, gainDb), raise, i, 0, 1e-12);
             assertEquals(2400 * u, elapsed, 0.5);
-            elapsed += i < 32 ? raise.frames(i) : 0;
+            elapsed += i < 64 ? raise.frames(i) : 0;
         }
         assertEquals(Sections.peak(1000, 1, 12), raise.target().section(0));
     }

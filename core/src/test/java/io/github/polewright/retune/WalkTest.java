@@ -250,4 +250,67 @@ class WalkTest {
         assertTrue(walk.isSettled());
         assertThrows(IllegalArgumentException.class, () -> new Walk(cascade(Section.of(1, 0, 0, 0, 2)), LIMIT));
     }
+
+    /** A notch caught on its way to a far one is not dragged: it fades where it is, and the other is born. */
+    @Test
+    void farNotchIsExchangedAlsoInTheMiddleOfAGlide() {
+        Section low = Sections.notch(50, 20);
+        Section near = Sections.notch(60, 20);
+        Section far = Sections.notch(5000, 20);
+        Walk walk = new Walk(cascade(low), LIMIT);
+        walk.adopt(Glide.between(cascade(low), cascade(near), Pace.TURNING));
+        walk.next(1000);
+        double caught = walk.bases()[3] + 1000 * walk.steps()[3];
+        walk.adopt(Glide.between(cascade(near), cascade(far), Pace.TURNING));
+        long planned = walk.framesLeft();
+        long frames = 0;
+        while (!walk.isSettled()) {
+            int stretch = walk.next(64);
+            double a1 = walk.bases()[3];
+            assertTrue(a1 == far.a1() || Math.abs(a1 - caught) < 1e-15, "a1 " + a1);
+            assertEquals(0, walk.steps()[3]);
+            frames += stretch;
+            walk.arrive();
+        }
+        assertEquals(planned, frames);
+        assertAt(far, walk, 0);
+        assertEquals(0, walk.framesHeld());
+    }
+
+    /** A glide that was to hop may not hop from elsewhere: it takes the frames that the distance from here needs. */
+    @Test
+    void hopFromElsewhereTakesTheCertifiedFrames() {
+        Section low = Sections.notch(50, 1);
+        Section high = Sections.notch(60, 1);
+        Glide hop = Glide.between(cascade(Sections.notch(59.5, 1)), cascade(high), Pace.FOLLOWING);
+        assertEquals(1, hop.totalFrames());
+        Walk walk = new Walk(cascade(low), LIMIT);
+        walk.adopt(hop);
+        long needed = Glide.between(cascade(low), cascade(high), Pace.FOLLOWING).totalFrames();
+        assertEquals(needed, walk.framesLeft(), 0.04 * needed);
+        runToEnd(walk);
+        assertAt(high, walk, 0);
+    }
+
+    @Test
+    void askingForTheLevelChangesNoBit() {
+        Cascade first = cascade(Sections.notch(50, 1));
+        Cascade second = cascade(Sections.notch(60, 1));
+        Walk asked = new Walk(first, LIMIT);
+        Walk silent = new Walk(first, LIMIT);
+        for (int i = 0; i < 300; i++) {
+            Glide glide = Glide.between(i % 2 == 0 ? first : second, i % 2 == 0 ? second : first, Pace.FOLLOWING);
+            asked.adopt(glide);
+            silent.adopt(glide);
+            for (int left = 1_111; left > 0; ) {
+                int frames = asked.next(Math.min(left, 37));
+                asked.level(0);
+                assertEquals(frames, silent.next(Math.min(left, 37)));
+                left -= frames;
+            }
+            assertEquals(silent.level(0), asked.level(0));
+        }
+        assertTrue(asked.framesHeld() > 0);
+        assertTrue(asked.highestLevel() <= LIMIT);
+    }
 }

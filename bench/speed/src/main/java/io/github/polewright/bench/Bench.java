@@ -8,6 +8,7 @@ import io.github.polewright.bench.contest.ContendersCommand;
 import io.github.polewright.bench.contest.ContendersFork;
 import io.github.polewright.bench.gate.GateCommand;
 import io.github.polewright.bench.soak.SoakCommand;
+import io.github.polewright.bench.tones.TonesCommand;
 import java.io.IOException;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
@@ -30,6 +31,7 @@ import picocli.CommandLine.IVersionProvider;
             CompareCommand.class,
             ContendersCommand.class,
             GateCommand.class,
+            TonesCommand.class,
             ColdFork.class,
             ContendersFork.class
         },

@@ -7,14 +7,20 @@ import org.jspecify.annotations.Nullable;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 
-/** The program: survey a recording, clean it, or see a demonstration. */
+/** The program: survey a recording, clean it, read the tones in it, or see a demonstration. */
 @Command(
         name = "polewright-samples",
-        description = "Finds mains hum and DC offset in recordings and takes them out.",
+        description = "Finds mains hum and DC offset in recordings and takes them out; reads tones in them.",
         mixinStandardHelpOptions = true,
         versionProvider = Main.Version.class,
         synopsisSubcommandLabel = "COMMAND",
-        subcommands = {SurveyCommand.class, CleanCommand.class, DemoCommand.class},
+        subcommands = {
+            SurveyCommand.class,
+            CleanCommand.class,
+            TonesCommand.class,
+            RetuneCommand.class,
+            DemoCommand.class
+        },
         footer = {"", "Exit status: 0 done, 1 failed, 2 wrong usage."})
 public final class Main implements Runnable {
 
@@ -64,6 +70,7 @@ public final class Main implements Runnable {
 
     @Override
     public void run() {
-        throw new CommandLine.ParameterException(new CommandLine(this), "a command is missing: survey, clean or demo");
+        throw new CommandLine.ParameterException(
+                new CommandLine(this), "a command is missing: survey, clean, tones, retune or demo");
     }
 }

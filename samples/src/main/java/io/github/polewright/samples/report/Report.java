@@ -48,7 +48,7 @@ public final class Report {
         if (!track.isEmpty()) {
             Charts.write(Charts.track(track), folder, "track");
         }
-        Spectrogram.write(in, out, topHz, folder, "spectrogram");
+        HumSpectrogram.write(in, out, topHz, folder, "spectrogram");
         List<String> text = CleaningText.of(in, out.path(), cleaning, wish.removeDc());
         WholeFile.writeText(folder.resolve("index.html"), page(in, text, !cleaning.followed(), !track.isEmpty()));
     }

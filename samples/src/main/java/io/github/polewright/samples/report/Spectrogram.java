@@ -1,119 +1,87 @@
 package io.github.polewright.samples.report;
 
-import io.github.polewright.samples.files.Frames;
-import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.files.WholeFile;
 import java.awt.Color;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
 import java.awt.image.BufferedImage;
-import java.io.IOException;
 import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
 import javax.imageio.ImageIO;
 import org.jtransforms.fft.DoubleFFT_1D;
 
-/** Level over time and frequency before and after, one above the other, as a picture. */
-final class Spectrogram {
+/** Pictures of sounds: time to the right, frequency upwards, level as brightness; one below the other. */
+public final class Spectrogram {
 
-    private static final int COLUMNS = 1000;
-    private static final int ROWS = 280;
-    private static final int LEFT = 70;
-    private static final int GAP = 46;
-    private static final double WINDOW_SECONDS = 0.25;
-    private static final double LOWEST_DB = -110;
-    private static final double HIGHEST_DB = -30;
+    private static final int WINDOW = 1024;
+    private static final int WIDTH = 900;
+    private static final int HEIGHT = 230;
+    private static final int MARGIN = 56;
+    private static final int TITLE = 26;
+    private static final double FLOOR_DB = -110;
+    private static final double MOST_HZ = 12_000;
+    private static final double AXIS_STEP_HZ = 4_000;
+    private static final Color INK = new Color(0x22, 0x2b, 0x38);
 
-    private final double topHz;
-    private final double seconds;
-    private final double[][] levelsDb = new double[COLUMNS][ROWS];
+    private Spectrogram() {}
 
-    private Spectrogram(Recording recording, double topHz) {
-        this.topHz = topHz;
-        this.seconds = recording.seconds();
-        int length = (int) Math.min(recording.frames(), Math.round(WINDOW_SECONDS * recording.sampleRateHz()));
-        double[] block = new double[length * recording.channels()];
-        double[] mono = new double[length];
-        DoubleFFT_1D transform = new DoubleFFT_1D(length);
-        int next = 0;
-        try (Frames frames = recording.read()) {
-            long done = 0;
-            for (int got = frames.read(block, length); got > 0; got = frames.read(block, length)) {
-                done += got;
-                if (got == length) {
-                    mix(block, mono, recording.channels());
-                    transform.realForward(mono);
-                }
-                int end = (int) (done * COLUMNS / recording.frames());
-                while (next < end) {
-                    fill(levelsDb[next++], mono, recording.sampleRateHz());
-                }
+    /** Writes a PNG with a panel for each sound. */
+    public static void write(Path target, double sampleRateHz, List<String> titles, List<double[]> sounds) {
+        int panel = HEIGHT + TITLE + 8;
+        BufferedImage image =
+                new BufferedImage(WIDTH + MARGIN + 12, panel * sounds.size() + 24, BufferedImage.TYPE_INT_RGB);
+        Graphics2D pen = image.createGraphics();
+        pen.setRenderingHint(RenderingHints.KEY_TEXT_ANTIALIASING, RenderingHints.VALUE_TEXT_ANTIALIAS_ON);
+        pen.setColor(Color.WHITE);
+        pen.fillRect(0, 0, image.getWidth(), image.getHeight());
+        pen.setColor(INK);
+        for (int i = 0; i < sounds.size(); i++) {
+            int top = i * panel + TITLE;
+            pen.drawString(titles.get(i), MARGIN, top - 8);
+            draw(image, top, sampleRateHz, sounds.get(i));
+            for (double hz = 0; hz <= MOST_HZ; hz += AXIS_STEP_HZ) {
+                int y = top + HEIGHT - (int) (HEIGHT * hz / MOST_HZ);
+                pen.drawString(String.format(Locale.ROOT, "%.0f kHz", hz / 1000), 6, y + 4);
+            }
+        }
+        double seconds = sounds.get(0).length / sampleRateHz;
+        for (double at = 0; at < seconds; at += 0.5) {
+            pen.drawString(
+                    String.format(Locale.ROOT, "%.1f s", at),
+                    MARGIN + (int) (WIDTH * at / seconds),
+                    image.getHeight() - 8);
+        }
+        pen.dispose();
+        WholeFile.write(target, beside -> ImageIO.write(image, "png", beside.toFile()));
+    }
+
+    private static void draw(BufferedImage image, int top, double sampleRateHz, double[] sound) {
+        DoubleFFT_1D transform = new DoubleFFT_1D(WINDOW);
+        for (int column = 0; column < WIDTH; column++) {
+            int first = (int) ((long) column * (sound.length - WINDOW) / (WIDTH - 1));
+            double[] bins = new double[WINDOW];
+            for (int n = 0; n < WINDOW; n++) {
+                bins[n] = sound[first + n] * window((double) n / WINDOW);
+            }
+            transform.realForward(bins);
+            for (int row = 0; row < HEIGHT; row++) {
+                double hz = MOST_HZ * (HEIGHT - 1 - row) / HEIGHT;
+                int bin = (int) Math.max(1, Math.round(hz * WINDOW / sampleRateHz));
+                double size = Math.hypot(bins[2 * bin], bins[2 * bin + 1]) * 4 / WINDOW;
+                image.setRGB(MARGIN + column, top + row, colour(20 * Math.log10(size + 1e-12)));
             }
         }
     }
 
-    /** Writes NAME.png. */
-    static void write(Recording before, Recording after, double topHz, Path folder, String name) {
-        Spectrogram above = new Spectrogram(before, topHz);
-        Spectrogram below = new Spectrogram(after, topHz);
-        WholeFile.write(folder.resolve(name + ".png"), beside -> {
-            BufferedImage image = new BufferedImage(LEFT + COLUMNS + 20, 2 * (ROWS + GAP), BufferedImage.TYPE_INT_RGB);
-            Graphics2D graphics = image.createGraphics();
-            graphics.setColor(Color.WHITE);
-            graphics.fillRect(0, 0, image.getWidth(), image.getHeight());
-            graphics.setRenderingHint(RenderingHints.KEY_TEXT_ANTIALIASING, RenderingHints.VALUE_TEXT_ANTIALIAS_ON);
-            above.paint(image, graphics, 20, "before");
-            below.paint(image, graphics, 20 + ROWS + GAP, "after");
-            graphics.dispose();
-            if (!ImageIO.write(image, "png", beside.toFile())) {
-                throw new IOException("this Java has no PNG writer");
-            }
-        });
+    /** Blackman-Harris, four terms: side lobes below -92 dB. */
+    private static double window(double u) {
+        double turn = 2 * Math.PI * u;
+        return 0.35875 - 0.48829 * Math.cos(turn) + 0.14128 * Math.cos(2 * turn) - 0.01168 * Math.cos(3 * turn);
     }
 
-    private static void mix(double[] block, double[] mono, int channels) {
-        for (int n = 0; n < mono.length; n++) {
-            double sum = 0;
-            for (int c = 0; c < channels; c++) {
-                double value = block[n * channels + c];
-                sum += Double.isFinite(value) ? value : 0;
-            }
-            mono[n] = sum / channels * (1 - Math.cos(2 * Math.PI * n / mono.length)) * 2 / mono.length;
-        }
-    }
-
-    private void fill(double[] column, double[] spectrum, double rate) {
-        double binHz = rate / spectrum.length;
-        for (int row = 0; row < ROWS; row++) {
-            int bin = (int) Math.round((row + 0.5) / ROWS * topHz / binHz);
-            boolean there = 2 * bin + 1 < spectrum.length;
-            double size = there ? Math.hypot(spectrum[2 * bin], spectrum[2 * bin + 1]) : 0;
-            column[row] = 20 * Math.log10(Math.max(1e-10, size));
-        }
-    }
-
-    private void paint(BufferedImage image, Graphics2D graphics, int top, String title) {
-        for (int column = 0; column < COLUMNS; column++) {
-            for (int row = 0; row < ROWS; row++) {
-                image.setRGB(LEFT + column, top + ROWS - 1 - row, color(levelsDb[column][row]));
-            }
-        }
-        graphics.setColor(Color.BLACK);
-        graphics.drawString(title, LEFT, top - 6);
-        for (int tick = 0; tick <= 4; tick++) {
-            int y = top + ROWS - tick * ROWS / 4;
-            graphics.drawString(Numbers.format("%.0f Hz", tick * topHz / 4), 8, Math.max(top + 10, y));
-            int x = LEFT + tick * (COLUMNS - 40) / 4;
-            graphics.drawString(
-                    Numbers.format("%.1f s", tick * seconds / 4 * (COLUMNS - 40) / COLUMNS), x, top + ROWS + 16);
-        }
-    }
-
-    /** Dark to bright, blue to yellow, so that it reads without colours as well. */
-    private static int color(double levelDb) {
-        double share = Math.max(0, Math.min(1, (levelDb - LOWEST_DB) / (HIGHEST_DB - LOWEST_DB)));
-        int red = (int) (255 * Math.pow(share, 1.2));
-        int green = (int) (235 * Math.pow(share, 1.5));
-        int blue = (int) (60 + 90 * Math.sin(Math.PI * share));
-        return red << 16 | green << 8 | blue;
+    private static int colour(double db) {
+        float share = (float) Math.max(0, Math.min(1, 1 - db / FLOOR_DB));
+        return Color.HSBtoRGB(0.72f - 0.6f * share, 1 - 0.6f * share * share, share);
     }
 }

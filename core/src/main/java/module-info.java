@@ -6,6 +6,7 @@ module io.github.polewright {
     requires static org.jspecify;
 
     exports io.github.polewright;
+    exports io.github.polewright.mains;
     exports io.github.polewright.pcm;
     exports io.github.polewright.design;
     exports io.github.polewright.inspect;

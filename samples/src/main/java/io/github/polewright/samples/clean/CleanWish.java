@@ -7,5 +7,6 @@ package io.github.polewright.samples.clean;
  * @param harmonics the highest harmonic to take out
  * @param widthHz the width of each notch
  * @param removeDc whether DC goes too
+ * @param fixed whether the notches stay where the survey has them, instead of following the mains
  */
-public record CleanWish(double mainsHz, int harmonics, double widthHz, boolean removeDc) {}
+public record CleanWish(double mainsHz, int harmonics, double widthHz, boolean removeDc, boolean fixed) {}

@@ -10,7 +10,7 @@ final class CleanedBytes extends InputStream {
 
     private final Recording recording;
     private final Frames frames;
-    private final CleaningStream stream;
+    private final FrameFilter filter;
     private final LongConsumer progress;
     private final double[] block;
     private final byte[] bytes;
@@ -19,10 +19,10 @@ final class CleanedBytes extends InputStream {
     private long clippedSamples;
     private long framesDone;
 
-    CleanedBytes(Recording recording, Frames frames, CleaningStream stream, LongConsumer progress) {
+    CleanedBytes(Recording recording, Frames frames, FrameFilter filter, LongConsumer progress) {
         this.recording = recording;
         this.frames = frames;
-        this.stream = stream;
+        this.filter = filter;
         this.progress = progress;
         this.block = new double[CleaningStream.BLOCK_FRAMES * recording.channels()];
         this.bytes = new byte[CleaningStream.BLOCK_FRAMES * recording.format().getFrameSize()];
@@ -54,7 +54,7 @@ final class CleanedBytes extends InputStream {
         if (got == 0) {
             return false;
         }
-        stream.process(block, got);
+        filter.process(block, got);
         int samples = got * recording.channels();
         clippedSamples += recording.pcm().encode(block, 0, bytes, 0, samples);
         at = 0;

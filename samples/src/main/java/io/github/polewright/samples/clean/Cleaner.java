@@ -9,7 +9,7 @@ import io.github.polewright.samples.survey.Surveyor;
 import java.nio.file.Path;
 import java.util.function.LongConsumer;
 
-/** Streams a recording through the cascade its survey asks for, and measures what that did. */
+/** Streams a recording through a remover that follows the hum, or the notches its survey asks for, and measures what that did. */
 public final class Cleaner {
 
     private Cleaner() {}
@@ -20,18 +20,34 @@ public final class Cleaner {
      * @param progress told of the frames done
      */
     public static Cleaning clean(Recording in, Path out, Survey survey, CleanWish wish, LongConsumer progress) {
-        HumCascade cascade = new HumCascade(in.sampleRateHz(), survey, wish);
-        CleaningStream stream = new CleaningStream(cascade, survey, in.sampleRateHz(), in.channels());
         long start = System.nanoTime();
-        stream.runUp(OpeningHum.of(in, survey), wish);
+        FrameFilter filter = filter(in, survey, wish);
         long clipped;
         try (Frames frames = in.read()) {
-            CleanedBytes bytes = new CleanedBytes(in, frames, stream, progress);
+            CleanedBytes bytes = new CleanedBytes(in, frames, filter, progress);
             WavFile.write(out, in.format(), in.frames(), bytes);
             clipped = bytes.clippedSamples();
         }
         double seconds = (System.nanoTime() - start) / 1e9;
         Surveyor.Measured after = Surveyor.measure(Recording.open(out), survey);
-        return new Cleaning(survey, after.lines(), after.dcOffset(), clipped, stream.nonFiniteSamples(), seconds);
+        boolean followed = filter instanceof FollowingStream;
+        long nonFinite = filter.nonFiniteSamples();
+        return new Cleaning(survey, followed, after.lines(), after.dcOffset(), clipped, nonFinite, seconds);
+    }
+
+    /** Hum that the survey found and the remover does not take for mains is left to the survey's notches. */
+    private static FrameFilter filter(Recording in, Survey survey, CleanWish wish) {
+        OpeningHum opening = OpeningHum.of(in, survey);
+        if (FollowingStream.suits(in, wish)) {
+            FollowingStream following = new FollowingStream(in, wish);
+            following.runUp(opening);
+            if (following.isFollowing() || !survey.humFound()) {
+                return following;
+            }
+        }
+        HumCascade cascade = new HumCascade(in.sampleRateHz(), survey, wish);
+        CleaningStream stream = new CleaningStream(cascade, survey, in.sampleRateHz(), in.channels());
+        stream.runUp(opening, wish);
+        return stream;
     }
 }

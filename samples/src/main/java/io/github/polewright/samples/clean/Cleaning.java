@@ -8,6 +8,7 @@ import java.util.List;
  * What a cleaning did.
  *
  * @param before what the survey of the recording found
+ * @param followed whether a remover followed the mains; if not, the survey's notches were kept
  * @param linesAfter the same lines, measured in the cleaned file
  * @param dcAfter the mean of each channel of the cleaned file
  * @param clippedSamples samples that left the range of the file's format
@@ -16,6 +17,7 @@ import java.util.List;
  */
 public record Cleaning(
         Survey before,
+        boolean followed,
         List<HumLine> linesAfter,
         List<Double> dcAfter,
         long clippedSamples,

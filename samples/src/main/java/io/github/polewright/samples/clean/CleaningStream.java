@@ -10,7 +10,7 @@ import io.github.polewright.samples.survey.Survey;
  * <p>A narrow notch needs seconds to catch a line. So that hum and DC are out from the first frame on, the cascade
  * first hears some seconds of the very hum and DC that the survey found at the beginning, extended backwards.
  */
-public final class CleaningStream {
+public final class CleaningStream implements FrameFilter {
 
     /** Frames a block, as an audio callback might bring. */
     public static final int BLOCK_FRAMES = 256;
@@ -49,7 +49,7 @@ public final class CleaningStream {
         }
     }
 
-    /** Filters the next frames in place. */
+    @Override
     public void process(double[] block, int frames) {
         if (survey.humFound() && framesDone >= nextRetuneFrame) {
             nextRetuneFrame = framesDone + (long) (RETUNE_SECONDS * sampleRateHz);
@@ -63,6 +63,7 @@ public final class CleaningStream {
         framesDone += frames;
     }
 
+    @Override
     public long nonFiniteSamples() {
         return live.replacedInputSamples();
     }

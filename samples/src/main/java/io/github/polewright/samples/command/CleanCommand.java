@@ -22,7 +22,8 @@ import picocli.CommandLine.Spec;
         name = "clean",
         description = {
             "Takes DC offset and mains hum out of a WAV file.",
-            "Only lines that are really there are notched; where no hum is found, only DC goes.",
+            "The mains are followed as they drift, and only lines that are really there are taken out; where no hum is"
+                    + " found, only DC goes.",
             "Sample rate, channels and sample format stay. What a file holds beside samples, such as cue points or"
                     + " titles, is not copied."
         },
@@ -45,8 +46,14 @@ final class CleanCommand implements Runnable {
     @Option(
             names = "--width",
             paramLabel = "HZ",
-            description = "The width of each notch (default ${DEFAULT-VALUE}). Narrow keeps more of the sound.")
+            description =
+                    "The width of each notch with --fixed (default ${DEFAULT-VALUE}). Narrow keeps more of the sound.")
     private double widthHz = 0.5;
+
+    @Option(
+            names = "--fixed",
+            description = "Keep notches where the survey finds the lines, instead of following the mains.")
+    private boolean fixed;
 
     @Option(names = "--no-dc", description = "Leave the DC offset in.")
     private boolean noDc;
@@ -62,7 +69,7 @@ final class CleanCommand implements Runnable {
         hum.check(spec);
         Checks.range(spec, "--width", widthHz, 0.05, 10);
         Checks.differs(spec, "OUT.wav", out, in);
-        CleanWish wish = new CleanWish(hum.mainsHz(), hum.harmonics(), widthHz, !noDc);
+        CleanWish wish = new CleanWish(hum.mainsHz(), hum.harmonics(), widthHz, !noDc, fixed);
         Recording recording = Recording.open(in);
         Checks.writable(out);
         if (report != null) {

@@ -10,7 +10,8 @@ final class HumOptions {
     @Option(
             names = "--mains",
             paramLabel = "HZ",
-            description = "Look for hum within 0.95 Hz of this frequency only; otherwise around 50 and 60 Hz.")
+            description =
+                    "Look for hum within 0.95 Hz of this frequency only, which implies --fixed; otherwise around 50 and 60 Hz.")
     private double mainsHz;
 
     @Option(

@@ -4,6 +4,7 @@ import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.report.SurveyJson;
 import io.github.polewright.samples.report.SurveyText;
+import io.github.polewright.samples.survey.MainsTrack;
 import io.github.polewright.samples.survey.Survey;
 import io.github.polewright.samples.survey.Surveyor;
 import java.io.PrintWriter;
@@ -49,6 +50,7 @@ final class SurveyCommand implements Runnable {
         }
         PrintWriter out = spec.commandLine().getOut();
         SurveyText.head(recording, survey).forEach(out::println);
+        SurveyText.track(MainsTrack.of(recording)).forEach(out::println);
         SurveyText.table(survey).forEach(out::println);
     }
 }

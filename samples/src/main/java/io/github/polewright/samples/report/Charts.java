@@ -5,6 +5,7 @@ import io.github.polewright.inspect.Response;
 import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.survey.AverageSpectrum;
 import io.github.polewright.samples.survey.HumLine;
+import io.github.polewright.samples.survey.MainsMoment;
 import io.github.polewright.samples.survey.Survey;
 import java.awt.Color;
 import java.awt.Graphics2D;
@@ -76,6 +77,18 @@ final class Charts {
         chart.getStyler().setXAxisMax(toHz);
         chart.getStyler().setYAxisMin(-62.0);
         chart.getStyler().setYAxisMax(3.0);
+        chart.getStyler().setLegendVisible(false);
+        return chart;
+    }
+
+    /** The mains frequency over time. */
+    static XYChart track(List<MainsMoment> track) {
+        XYChart chart = chart("The mains over time", "frequency, Hz");
+        chart.setXAxisTitle("time, s");
+        double[] seconds = track.stream().mapToDouble(MainsMoment::seconds).toArray();
+        double[] hertz = track.stream().mapToDouble(MainsMoment::frequencyHz).toArray();
+        style(chart.addSeries("mains", seconds, hertz), AFTER);
+        chart.getStyler().setYAxisDecimalPattern("0.000");
         chart.getStyler().setLegendVisible(false);
         return chart;
     }

@@ -21,6 +21,9 @@ public final class CleaningText {
         List<String> lines = new ArrayList<>(SurveyText.head(in, before));
         if (!before.humFound()) {
             lines.add(dcWanted ? "           so only DC is removed" : "           so nothing is removed");
+        } else {
+            lines.add("removal    "
+                    + (cleaning.followed() ? "follows the mains" : "by notches where the survey has them"));
         }
         lines.add("");
         if (dcWanted) {

@@ -8,6 +8,8 @@ import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.survey.AverageSpectrum;
 import io.github.polewright.samples.survey.HumLine;
+import io.github.polewright.samples.survey.MainsMoment;
+import io.github.polewright.samples.survey.MainsTrack;
 import io.github.polewright.samples.survey.Survey;
 import java.nio.file.Path;
 import java.util.List;
@@ -17,6 +19,15 @@ public final class Report {
 
     private static final double CHART_TOP_HZ = 1000;
     private static final double LOWEST_HZ = 10;
+
+    private static final String TRACK = """
+            <h2>The mains</h2>
+            <p>Their frequency, where the follower was sure of it.</p>
+            """;
+    private static final String CASCADE = """
+            <h2>The cascade</h2>
+            <p>Its response; the notches reach down without end, the chart stops at -60 dB.</p>
+            """;
 
     private Report() {}
 
@@ -29,10 +40,17 @@ public final class Report {
         AverageSpectrum after = AverageSpectrum.of(out, wholeHz);
         Charts.write(Charts.spectra("Where the lines are", before, after, 0, topHz), folder, "spectra-low");
         Charts.write(Charts.spectra("All of it", before, after, LOWEST_HZ, wholeHz), folder, "spectra-whole");
-        Cascade cascade = new HumCascade(in.sampleRateHz(), survey, wish).at(survey.fundamentalHz());
-        Charts.write(Charts.response(cascade, survey, wish.widthHz(), topHz), folder, "response");
+        if (!cleaning.followed()) {
+            Cascade cascade = new HumCascade(in.sampleRateHz(), survey, wish).at(survey.fundamentalHz());
+            Charts.write(Charts.response(cascade, survey, wish.widthHz(), topHz), folder, "response");
+        }
+        List<MainsMoment> track = MainsTrack.of(in);
+        if (!track.isEmpty()) {
+            Charts.write(Charts.track(track), folder, "track");
+        }
+        HumSpectrogram.write(in, out, topHz, folder, "spectrogram");
         List<String> text = CleaningText.of(in, out.path(), cleaning, wish.removeDc());
-        WholeFile.writeText(folder.resolve("index.html"), page(in, text));
+        WholeFile.writeText(folder.resolve("index.html"), page(in, text, !cleaning.followed(), !track.isEmpty()));
     }
 
     private static double topHz(Survey survey) {
@@ -41,7 +59,7 @@ public final class Report {
         return Math.max(CHART_TOP_HZ, 100 * Math.ceil(highest / 100 + 0.5));
     }
 
-    private static String page(Recording in, List<String> text) {
+    private static String page(Recording in, List<String> text, boolean cascade, boolean track) {
         return """
                 <!DOCTYPE html>
                 <html lang="en">
@@ -62,8 +80,10 @@ public final class Report {
                 <p>Mean power over the recording and its channels, in windows of 4 seconds.</p>
                 %s
                 %s
-                <h2>The cascade</h2>
-                <p>Its response; the notches reach down without end, the chart stops at -60 dB.</p>
+                <h2>Over time</h2>
+                <p>Level over time and frequency, before above and after below.</p>
+                <p><img src="spectrogram.png" alt="Spectrograms of the recording before and after"></p>
+                %s
                 %s
                 </body>
                 </html>
@@ -73,7 +93,8 @@ public final class Report {
                         escaped(String.join("\n", text)),
                         image("spectra-low", "Level over frequency where the hum lines are, before and after"),
                         image("spectra-whole", "Level over frequency, before and after"),
-                        image("response", "Gain of the cascade over frequency"));
+                        track ? TRACK + image("track", "Mains frequency over time") : "",
+                        cascade ? CASCADE + image("response", "Gain of the cascade over frequency") : "");
     }
 
     private static String name(Recording recording) {

@@ -2,6 +2,8 @@ package io.github.polewright.samples.report;
 
 import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.survey.HumLine;
+import io.github.polewright.samples.survey.MainsMoment;
+import io.github.polewright.samples.survey.MainsTrack;
 import io.github.polewright.samples.survey.Survey;
 import java.util.ArrayList;
 import java.util.List;
@@ -41,6 +43,18 @@ public final class SurveyText {
         int count = survey.lines().size();
         return Numbers.format(
                 "found at %.3f Hz, %s, %d %s", survey.fundamentalHz(), drift, count, count == 1 ? "line" : "lines");
+    }
+
+    /** Where the mains went, as the follower hears them. */
+    public static List<String> track(List<MainsMoment> track) {
+        if (track.isEmpty()) {
+            return List.of();
+        }
+        MainsMoment first = track.get(0);
+        MainsMoment last = track.get(track.size() - 1);
+        return List.of(Numbers.format(
+                "track      %.3f Hz at %.2f s, %.3f Hz at %.2f s, drift of %.3f Hz in all",
+                first.frequencyHz(), first.seconds(), last.frequencyHz(), last.seconds(), MainsTrack.driftHz(track)));
     }
 
     public static List<String> table(Survey survey) {

@@ -154,7 +154,7 @@ final class SpeechTest {
         double best = Double.NEGATIVE_INFINITY;
         for (double widthHz : new double[] {0.25, 0.5, 1, 2}) {
             Survey none = new Survey(List.of(0.0), false, false, 0, 0, List.of(), List.of(), 0);
-            CleanWish dcOnly = new CleanWish(0, HARMONICS, widthHz, true);
+            CleanWish dcOnly = new CleanWish(0, HARMONICS, widthHz, true, true);
             LiveCascade comb = LiveCascade.of(
                     new HumCascade(RATE_HZ, none, dcOnly)
                             .at(fundamentalHz)
@@ -183,7 +183,7 @@ final class SpeechTest {
         double[] mixture = Sounds.plus(Sounds.sum(speech, hum), 0.02);
         Recording recording = Recording.open(Wav.write(folder.resolve("mixture.wav"), RATE_HZ, 1, 32, true, mixture));
 
-        CleanWish wish = new CleanWish(0, Surveyor.DEFAULT_HARMONICS, 0.5, true);
+        CleanWish wish = new CleanWish(0, Surveyor.DEFAULT_HARMONICS, 0.5, true, true);
         Survey survey = Surveyor.survey(recording, 0, wish.harmonics());
         assertTrue(survey.humFound());
         System.out.printf(

@@ -1,0 +1,85 @@
+package io.github.polewright.mains;
+
+/** A two-state Kalman filter of phase and frequency whose drift grows when innovations agree with each other. */
+final class FrequencyLoop {
+
+    private static final double FIRST_VARIANCE = 0.09;
+    private static final double DRIFT = 2e-4;
+    private static final double MOST_DRIFT = 1;
+    private static final double MOST_STEP_HZ = 0.2;
+    private static final double AGREE_SECONDS = 0.15;
+    private static final double RISE_SECONDS = 0.08;
+    private static final double FALL_SECONDS = 0.4;
+
+    private static final double SETTLED = 10;
+
+    private double frequencyHz;
+    private double phaseVariance;
+    private double cross;
+    private double frequencyVariance;
+    private double agreement;
+    private double excess;
+
+    void start(double fromHz) {
+        frequencyHz = fromHz;
+        phaseVariance = 0.01;
+        cross = 0;
+        frequencyVariance = FIRST_VARIANCE;
+        agreement = 0;
+        excess = 1;
+    }
+
+    /** A tick passes. */
+    void predict(double seconds) {
+        double turn = 2 * Math.PI * seconds;
+        double strength = Math.max(1, excess);
+        double drift = Math.min(DRIFT * strength * strength, MOST_DRIFT);
+        phaseVariance += 2 * turn * cross + turn * turn * frequencyVariance;
+        cross += turn * frequencyVariance;
+        frequencyVariance = Math.min(frequencyVariance + drift * seconds, FIRST_VARIANCE);
+        double most = Math.sqrt(phaseVariance * frequencyVariance);
+        cross = Math.min(cross, 0.999 * most);
+    }
+
+    /** Variance of the phase, in radians squared. */
+    double phaseVariance() {
+        return phaseVariance;
+    }
+
+    /** Takes a phase error with its information; returns by how much the phase moves. */
+    double correct(double radians, double information, double seconds) {
+        if (!(information > 1e-12)) {
+            return 0;
+        }
+        double innovationVariance = phaseVariance + 0.5 / information;
+        double phaseGain = phaseVariance / innovationVariance;
+        double frequencyGain = cross / innovationVariance;
+        watch(radians / Math.sqrt(innovationVariance), seconds);
+        double step = frequencyGain * radians;
+        frequencyHz += Math.max(-MOST_STEP_HZ, Math.min(MOST_STEP_HZ, step));
+        frequencyVariance -= frequencyGain * cross;
+        cross -= phaseGain * cross;
+        phaseVariance -= phaseGain * phaseVariance;
+        return phaseGain * radians;
+    }
+
+    private void watch(double normalized, double seconds) {
+        agreement += Math.min(1, seconds / AGREE_SECONDS) * (normalized - agreement);
+        double square = agreement * agreement * 2 * AGREE_SECONDS / seconds;
+        double pace = square > excess ? RISE_SECONDS : FALL_SECONDS;
+        excess += Math.min(1, seconds / pace) * (square - excess);
+    }
+
+    /** Whether phase errors do not agree with each other: the frequency does not run. */
+    boolean isSettled() {
+        return excess < SETTLED;
+    }
+
+    double frequencyHz() {
+        return frequencyHz;
+    }
+
+    double uncertaintyHz() {
+        return Math.sqrt(frequencyVariance * Math.max(1, excess));
+    }
+}

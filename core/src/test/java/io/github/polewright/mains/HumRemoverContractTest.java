@@ -201,13 +201,18 @@ class HumRemoverContractTest {
         float[] output = new float[input.length];
         HumRemover remover = remover(48000, Removal.SUBTRACTION);
         remover.process(input, 0, output, 0, 48000);
-        long control = allocated(() -> Runtime.getRuntime().availableProcessors());
-        long bytes = allocated(() -> {
-            for (int at = 48000; at < 5 * 48000; at += 128) {
-                remover.process(input, 2 * at, output, 2 * at, 128);
-            }
-        });
-        assertTrue(bytes <= control + 64, bytes + " bytes beside " + control);
+        long least = Long.MAX_VALUE;
+        // The JVM itself allocates now and then where it takes up a method for compiling; a block's own would always
+        // show.
+        for (int second = 1; second < 5; second++) {
+            int from = second * 48000;
+            least = Math.min(least, allocated(() -> {
+                for (int at = from; at < from + 48000; at += 128) {
+                    remover.process(input, 2 * at, output, 2 * at, 128);
+                }
+            }));
+        }
+        assertEquals(0, least, "bytes in the leanest second");
         assertTrue(allocated(() -> input.clone()) > 1_000_000, "the measure must see an allocation");
         assertEquals(MainsState.FOLLOWING, remover.reading().state());
     }

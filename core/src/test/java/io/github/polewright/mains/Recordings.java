@@ -11,16 +11,16 @@ import java.util.List;
 import java.util.stream.Stream;
 
 /** Speech recordings from a folder that is named by a system property; none are kept here. */
-final class Recordings {
+public final class Recordings {
 
     static final String PROPERTY = "polewright.recordings";
 
-    record Recording(String name, double sampleRateHz, double[] samples) {}
+    public record Recording(String name, double sampleRateHz, double[] samples) {}
 
     private Recordings() {}
 
     /** All 16-bit mono WAV files of the folder, by name; empty if there is no folder. */
-    static List<Recording> all() {
+    public static List<Recording> all() {
         String folder = System.getProperty(PROPERTY, "");
         if (folder.isEmpty()) {
             return List.of();

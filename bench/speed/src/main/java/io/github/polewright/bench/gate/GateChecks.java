@@ -41,7 +41,7 @@ final class GateChecks {
         }
         enter(frames(512));
         enter(frames(4096));
-        enter(sections(4));
+        enter(sections(16));
         enter(sections(64));
     }
 
@@ -96,8 +96,9 @@ final class GateChecks {
         }
         linear(checks, scores, frames(512), frames(64), "a frame");
         linear(checks, scores, frames(4096), frames(512), "a frame");
-        linear(checks, scores, sections(8), sections(4), "a section");
-        linear(checks, scores, sections(64), sections(8), "a section");
+        // From 8 sections on, load and store no longer decide.
+        linear(checks, scores, sections(16), sections(8), "a section");
+        linear(checks, scores, sections(64), sections(16), "a section");
         return checks;
     }
 

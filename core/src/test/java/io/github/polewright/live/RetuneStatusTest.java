@@ -79,8 +79,9 @@ class RetuneStatusTest {
         assertEquals(1, live.retuneStatus().adopted());
         assertTrue(live.isSettled());
         for (int i = 0; i < 2_400; i++) {
-            double least = Math.min(noise[0][i], filtered[0][i]), most = Math.max(noise[0][i], filtered[0][i]);
-            assertTrue(fading[0][i] >= least - 1e-12 && fading[0][i] <= most + 1e-12, "frame " + i);
+            double u = (i + 1) / 2_400.0, share = 1 - u * u * (3 - 2 * u);
+            double mixed = share * filtered[0][i] + (1 - share) * noise[0][i];
+            assertEquals(mixed, fading[0][i], 1e-12, "frame " + i);
         }
         assertArrayEquals(noise, run(live, noise));
         run(never, noise);

@@ -33,6 +33,7 @@ final class SlotAims {
     private final double[] distances;
     private final double[] leaks;
     private final int[] ways;
+    private final RampMeter meter = new RampMeter();
     private double slowdown;
     private long behind;
     private boolean isRinging;
@@ -83,17 +84,17 @@ final class SlotAims {
             System.arraycopy(bases, at, origins, at, WIDTH);
             return STRAIGHT;
         }
-        double distance = Distance.upperBound(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]);
-        if (distance > FARTHEST && Transparency.opensBothEnds(bases, at) && Transparency.opensBothEnds(end, at)) {
+        measure(slot, end);
+        if (distances[slot] > FARTHEST
+                && Transparency.opensBothEnds(bases, at)
+                && Transparency.opensBothEnds(end, at)) {
             isRinging = true;
             isExchanging = true;
             return EXCHANGING;
         }
-        distances[slot] = distance;
-        leaks[slot] = Bucket.leak(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]);
-        double factor = (0.5 * distance / leaks[slot] + 1) / glide.movingFrames();
-        if (factor > slowdown && !mayJump(end, at)) {
-            slowdown = factor;
+        double frames = 0.5 * distances[slot] / leaks[slot] + 1;
+        if (frames > slowdown * glide.movingFrames() && !mayJump(end, at)) {
+            slowdown = frames / glide.movingFrames();
         }
         return glide.isExchanged(slot) ? STRAIGHT : MIXING;
     }
@@ -128,22 +129,22 @@ final class SlotAims {
     /** Aims at the end of a segment; false if a bucket does not admit that yet. */
     boolean aim(Glide glide, int segment, Bucket bucket) {
         boolean admitted = true;
+        double share = (double) (behind + glide.frames(segment)) / glide.movingFrames();
         for (int slot = 0; slot < ways.length; slot++) {
             if (ways[slot] == JOINED) {
                 System.arraycopy(glide.knot(segment + 1), slot * WIDTH, goals, slot * WIDTH, WIDTH);
                 distances[slot] = glide.distance(segment, slot);
                 leaks[slot] = glide.leak(segment, slot);
             } else {
-                aimAlone(glide, segment, slot);
+                aimAlone(glide, segment, slot, share);
             }
             admitted &= bucket.admits(slot, distances[slot]);
         }
         return admitted;
     }
 
-    private void aimAlone(Glide glide, int segment, int slot) {
+    private void aimAlone(Glide glide, int segment, int slot, double share) {
         int at = slot * WIDTH;
-        double share = (double) (behind + glide.frames(segment)) / glide.movingFrames();
         if (ways[slot] == FADING || ways[slot] == EXCHANGING) {
             goals[at] = Knots.mix(origins[at], 1, share);
             goals[at + 1] = Knots.mix(origins[at + 1], origins[at + 3], share);
@@ -157,14 +158,15 @@ final class SlotAims {
             }
         }
         if (ways[slot] != MIXING || behind > 0 || share < 1) {
-            cost(slot);
+            measure(slot, goals);
         }
     }
 
-    private void cost(int slot) {
+    private void measure(int slot, double[] end) {
         int at = slot * WIDTH;
-        distances[slot] = Distance.upperBound(bases[at + 3], bases[at + 4], goals[at + 3], goals[at + 4]);
-        leaks[slot] = Bucket.leak(bases[at + 3], bases[at + 4], goals[at + 3], goals[at + 4]);
+        meter.measure(bases[at + 3], bases[at + 4], end[at + 3], end[at + 4]);
+        distances[slot] = meter.distance();
+        leaks[slot] = meter.leak();
     }
 
     /** Charges every slot for the segment ahead; the highest level that makes. */
@@ -221,7 +223,7 @@ final class SlotAims {
     void stay() {
         System.arraycopy(bases, 0, goals, 0, bases.length);
         for (int slot = 0; slot < ways.length; slot++) {
-            cost(slot);
+            measure(slot, goals);
         }
     }
 
@@ -246,7 +248,7 @@ final class SlotAims {
     void rise(Glide glide) {
         System.arraycopy(glide.knot(glide.segmentCount()), 0, goals, 0, goals.length);
         for (int slot = 0; slot < ways.length; slot++) {
-            cost(slot);
+            measure(slot, goals);
         }
     }
 }

@@ -307,10 +307,11 @@ public final class Walk {
         isWalking = true;
         highestLevel = Math.max(highestLevel, aims.charge(bucket));
         double[] goals = aims.goals();
+        double share = 1.0 / length;
         for (int i = 0; i < steps.length; i++) {
-            steps[i] = (goals[i] - bases[i]) / length;
-            isMoving |= steps[i] != 0;
+            steps[i] = share * (goals[i] - bases[i]);
         }
+        isMoving = !Arrays.equals(goals, bases);
     }
 
     /** Stands still for as many frames as the fullest bucket needs. */

@@ -14,10 +14,10 @@ public final class Pace {
     public static final Pace TURNING = new Pace(false, 1, 0.05, 0);
 
     /**
-     * A single change: it starts and ends gently, and takes twice the certified length, 50 ms, or 20 ms an octave,
+     * A single change: it starts and ends gently, and takes twice the certified length, 60 ms, or 25 ms an octave,
      * whichever is longest.
      */
-    public static final Pace SINGLE = new Pace(true, 2, 0.05, 0.02);
+    public static final Pace SINGLE = new Pace(true, 2, 0.06, 0.025);
 
     /** Following a slow drift: even speed, no longer than the certificate asks for. */
     public static final Pace FOLLOWING = new Pace(false, 1, 0, 0);

@@ -53,6 +53,14 @@ final class Poles {
         return Math.max(Math.sqrt(Math.abs(heightSquared)), 0.5 * gap(a1, a2, heightSquared));
     }
 
+    /** h, with a minus sign where the home is not the pole itself. */
+    static double signedHeight(double a1, double a2) {
+        double heightSquared = heightSquared(a1, a2);
+        double root = Math.sqrt(Math.abs(heightSquared));
+        double least = 0.5 * gap(a1, a2, heightSquared);
+        return heightSquared > 0 && root >= least ? root : -Math.max(root, least);
+    }
+
     /**
      * Whether the home is the pole itself. The sets for which this holds form a convex region of the (a1, a2) plane: a
      * straight ramp between two of them never leaves it.

@@ -7,6 +7,7 @@ package io.github.polewright.retune;
  */
 final class RampMeter {
 
+    private final RealRamp realRamp = new RealRamp();
     private double distance;
     private double leak;
 
@@ -25,7 +26,7 @@ final class RampMeter {
         double firstSquared = Poles.heightSquared(a1, a2);
         double secondSquared = Poles.heightSquared(c1, c2);
         if (!(isClearlyComplex(firstSquared, a2) && isClearlyComplex(secondSquared, c2))) {
-            distance = Distance.upperBound(a1, a2, c1, c2);
+            distance = Distance.upperBound(a1, a2, c1, c2, realRamp);
             leak = Bucket.leak(a1, a2, c1, c2);
             return;
         }

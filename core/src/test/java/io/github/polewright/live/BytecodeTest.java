@@ -41,6 +41,7 @@ class BytecodeTest {
             "java/nio/FloatBuffer.order",
             "java/nio/FloatBuffer.remaining",
             "java/nio/ByteOrder.nativeOrder",
+            "java/util/Arrays.equals",
             "java/util/Arrays.fill",
             "java/util/concurrent/atomic/AtomicLong.setRelease",
             "java/util/concurrent/atomic/AtomicReference.getAcquire",

@@ -66,9 +66,9 @@ class GlideTest {
         Cascade wide = cascade(Sections.lowPass(1000, 0.7));
         Cascade wider = cascade(Sections.lowPass(1060, 0.7));
         assertEquals(2400, Glide.between(wide, wider, Pace.TURNING).totalFrames());
-        assertEquals(2400, Glide.between(wide, wider, Pace.SINGLE).totalFrames());
+        assertEquals(2880, Glide.between(wide, wider, Pace.SINGLE).totalFrames());
         Glide sweep = Glide.along(LOW_PASS, new Setting(200, 4, 0), new Setting(12800, 4, 0), Pace.SINGLE);
-        assertEquals(0.02 * 6 * 48_000, sweep.totalFrames(), 1);
+        assertEquals(0.025 * 6 * 48_000, sweep.totalFrames(), 1);
     }
 
     @Test
@@ -104,7 +104,7 @@ class GlideTest {
             double u = i / 64.0;
             double gainDb = 12 * (u * u * (3 - 2 * u));
             assertKnot(Sections.peak(1000, 1, gainDb), raise, i, 0, 1e-12);
-            assertEquals(2400 * u, elapsed, 0.5);
+            assertEquals(2880 * u, elapsed, 0.5);
             elapsed += i < 64 ? raise.frames(i) : 0;
         }
         assertEquals(Sections.peak(1000, 1, 12), raise.target().section(0));

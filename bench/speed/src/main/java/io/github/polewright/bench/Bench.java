@@ -7,6 +7,7 @@ import io.github.polewright.bench.compare.CompareCommand;
 import io.github.polewright.bench.contest.ContendersCommand;
 import io.github.polewright.bench.contest.ContendersFork;
 import io.github.polewright.bench.gate.GateCommand;
+import io.github.polewright.bench.hum.HumCommand;
 import io.github.polewright.bench.soak.SoakCommand;
 import io.github.polewright.bench.tones.TonesCommand;
 import java.io.IOException;
@@ -32,6 +33,7 @@ import picocli.CommandLine.IVersionProvider;
             ContendersCommand.class,
             GateCommand.class,
             TonesCommand.class,
+            HumCommand.class,
             ColdFork.class,
             ContendersFork.class
         },

@@ -1,10 +1,10 @@
 package io.github.polewright.bench.jmh;
 
+import io.github.polewright.bench.workload.HumTape;
 import io.github.polewright.mains.HumRemover;
 import io.github.polewright.mains.MainsState;
 import io.github.polewright.mains.Removal;
 import java.util.Objects;
-import java.util.SplittableRandom;
 import java.util.concurrent.TimeUnit;
 import org.jspecify.annotations.Nullable;
 import org.openjdk.jmh.annotations.Benchmark;
@@ -32,11 +32,6 @@ import org.openjdk.jmh.annotations.Warmup;
 @Measurement(iterations = 5, time = 1)
 public class HumRemoverBlocks {
 
-    private static final int LINES = 20;
-    private static final double MAINS_HZ = 50;
-    /** A whole number of periods and of blocks: the tape goes round without a seam in the hum. */
-    private static final int TAPE_SECONDS = 8;
-
     /** Hertz. */
     @Param("48000")
     public int sampleRateHz;
@@ -61,21 +56,11 @@ public class HumRemoverBlocks {
     /** Makes the tape and lets the remover find the hum. */
     @Setup(Level.Trial)
     public void prepare() {
-        SplittableRandom random = new SplittableRandom(5);
-        tape = new float[TAPE_SECONDS * sampleRateHz * channels];
+        tape = HumTape.of(sampleRateHz, channels);
         destination = new float[frames * channels];
-        for (int n = 0; n < TAPE_SECONDS * sampleRateHz; n++) {
-            double hum = 0;
-            for (int k = 1; k <= LINES; k++) {
-                hum += 0.02 / Math.sqrt(k) * Math.sin(2 * Math.PI * k * MAINS_HZ * n / sampleRateHz + k * k);
-            }
-            for (int c = 0; c < channels; c++) {
-                tape[n * channels + c] = (float) (hum + 0.02 * (random.nextDouble() - 0.5));
-            }
-        }
         HumRemover made = HumRemover.builder(sampleRateHz, channels).by(removal).build();
         remover = made;
-        for (int n = 0; n < TAPE_SECONDS * sampleRateHz / frames; n++) {
+        for (int n = 0; n < tape.length / channels / frames; n++) {
             block();
         }
         if (made.reading().state() != MainsState.FOLLOWING) {

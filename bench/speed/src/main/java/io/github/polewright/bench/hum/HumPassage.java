@@ -18,7 +18,7 @@ import io.github.polewright.mains.Removal;
 record HumPassage(int sampleRateHz, int channels, int frames, int repeats) {
 
     LeastTimes play(Removal removal) {
-        float[] tape = HumTape.of(sampleRateHz, channels);
+        float[] tape = HumTape.of(sampleRateHz, channels, frames);
         float[] destination = new float[frames * channels];
         int blocks = tape.length / channels / frames;
         LeastTimes times = new LeastTimes(blocks);

@@ -56,7 +56,7 @@ public class HumRemoverBlocks {
     /** Makes the tape and lets the remover find the hum. */
     @Setup(Level.Trial)
     public void prepare() {
-        tape = HumTape.of(sampleRateHz, channels);
+        tape = HumTape.of(sampleRateHz, channels, frames);
         destination = new float[frames * channels];
         HumRemover made = HumRemover.builder(sampleRateHz, channels).by(removal).build();
         remover = made;

@@ -58,8 +58,8 @@ class SoakTest {
             for (Future<?> thread : control) {
                 thread.get();
             }
-            // The JVM puts some single objects down to the thread; one a block would be far more.
-            assertTrue(bytes < 10_000, bytes + " bytes");
+            // While it compiles a method anew the JVM puts a few objects of its own down to the thread, 1.7 kB in all.
+            assertTrue(bytes < 2_000, bytes + " bytes");
         } finally {
             done.set(true);
             threads.shutdownNow();
@@ -84,8 +84,11 @@ class SoakTest {
         double[] noise = Signals.noise(1, 1, 1 << 16)[0];
         double[] block = new double[FRAMES];
         double most = 0;
-        long before = METER.getCurrentThreadAllocatedBytes();
+        long before = 0;
         for (int i = 0; i < blocks; i++) {
+            if (i == blocks / 10) {
+                before = METER.getCurrentThreadAllocatedBytes();
+            }
             int frames = 1 + i % FRAMES;
             System.arraycopy(noise, i * 31 & 0x7fff, block, 0, frames);
             live.process(block, 0, block, 0, frames);

@@ -127,7 +127,7 @@ public final class Distance {
 
     /** asinh x from above: x itself, or 4 (r - 1)/sqrt(r) with r^4 = x + sqrt(1 + x^2), as ln z <= (z - 1)/sqrt(z). */
     static double asinhBound(double x) {
-        if (x < 0.05) {
+        if (x < 0.4) {
             return x;
         }
         double root = Math.sqrt(Math.sqrt(x + Math.sqrt(1 + x * x)));

@@ -152,13 +152,20 @@ final class SlotAims {
             goals[at + 3] = origins[at + 3];
             goals[at + 4] = origins[at + 4];
         } else {
-            double[] knot = glide.knot(ways[slot] == STRAIGHT ? glide.segmentCount() : segment + 1);
-            for (int i = at; i < at + WIDTH; i++) {
-                goals[i] = Knots.mix(origins[i], knot[i], share);
-            }
+            mix(glide.knot(ways[slot] == STRAIGHT ? glide.segmentCount() : segment + 1), at, share);
         }
         if (ways[slot] != MIXING || behind > 0 || share < 1) {
             measure(slot, goals);
+        }
+    }
+
+    private void mix(double[] knot, int at, double share) {
+        if (share >= 1) {
+            System.arraycopy(knot, at, goals, at, WIDTH);
+            return;
+        }
+        for (int i = at; i < at + WIDTH; i++) {
+            goals[i] = Knots.mix(origins[i], knot[i], share);
         }
     }
 

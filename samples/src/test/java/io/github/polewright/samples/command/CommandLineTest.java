@@ -22,6 +22,8 @@ import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import javax.imageio.ImageIO;
 import org.junit.jupiter.api.BeforeEach;
@@ -177,10 +179,44 @@ final class CommandLineTest {
         assertEquals(0, run("clean", in, out), complained);
         assertTrue(printed.contains("no hum found"), printed);
         assertTrue(printed.contains("only DC is removed"), printed);
+        assertFalse(printed.contains("Caution"), printed);
         double[] rest = Sounds.sum(Wav.read(out), Sounds.scaled(notes, -1));
         // A notch of 1 Hz at DC turns a tone of 55 Hz by 1 degree, and higher ones less.
         assertEquals(0, Sounds.rms(rest) / Sounds.rms(notes), 0.02);
         assertEquals(0, Arrays.stream(Wav.read(out)).average().orElseThrow(), 1e-4);
+    }
+
+    /** Hum that fills a sixth of the recording: no hum of the recording to the survey, but the follower meets it. */
+    @Test
+    void humThatTheSurveyMissesIsToldWhereTheFollowerTakesItOut() {
+        double[] sound = Sounds.noise(8000, 90, 0.002, 6);
+        double[] hum = Sounds.hum(8000, 15, 50.04, SIZES, 1);
+        for (int n = 0; n < hum.length; n++) {
+            sound[60 * 8000 + n] += hum[n];
+        }
+        Wav.write(in, 8000, 1, 24, false, sound);
+        assertEquals(0, run("clean", in, out), complained);
+        assertTrue(printed.contains("no hum found"), printed);
+        assertFalse(printed.contains("removed"), printed);
+        Matcher told = Pattern.compile(
+                        "met hum from ([\\d.]+) s on: up to (\\d) lines of 50.04\\d Hz taken out, for ([\\d.]+) s")
+                .matcher(printed);
+        assertTrue(told.find(), printed);
+        double from = Double.parseDouble(told.group(1));
+        double seconds = Double.parseDouble(told.group(3));
+        assertTrue(from > 60 && from + seconds > 75 && from + seconds < 77, printed);
+        assertTrue(printed.contains("low volume"), printed);
+        // What is told is what was done: the hum is gone from a second after that on, and was there before it.
+        assertEquals(0.002, Sounds.rms(part(Wav.read(out), from + 1, 75)), 0.0004);
+        assertEquals(Sounds.rms(hum), Sounds.rms(part(Wav.read(out), 60, from - 0.5)), 0.001);
+
+        assertEquals(0, run("clean", in, out, "--fixed"), complained);
+        assertTrue(printed.contains("only DC is removed"), printed);
+        assertFalse(printed.contains("Caution"), printed);
+    }
+
+    private static double[] part(double[] sound, double fromSeconds, double toSeconds) {
+        return Arrays.copyOfRange(sound, (int) (fromSeconds * 8000), (int) (toSeconds * 8000));
     }
 
     @Test
@@ -336,7 +372,18 @@ final class CommandLineTest {
         refused(Main.USAGE, "--width", "clean", in, out, "--width", "NaN");
         refused(Main.USAGE, "--width", "clean", in, out, "--width", "wide");
         refused(Main.USAGE, "--mains", "clean", in, out, "--mains", "-50");
-        refused(Main.USAGE, "--harmonics", "survey", in, "--harmonics", "0");
+        refused(
+                Main.USAGE,
+                "--width is 6.0; it must be 0.05 to 5.0",
+                "clean",
+                in,
+                out,
+                "--mains",
+                "10",
+                "--width",
+                "6");
+        refused(Main.USAGE, "--harmonics is 0; it must be 1 to 200 ", "survey", in, "--harmonics", "0");
+        refused(Main.USAGE, "--harmonics is 201; it must be 1 to 200 ", "clean", in, out, "--harmonics", "201");
     }
 
     @Test

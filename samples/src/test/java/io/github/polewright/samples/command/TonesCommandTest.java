@@ -145,6 +145,14 @@ final class TonesCommandTest {
         assertTrue(printed.lines().toList().get(1).endsWith(",1500"), printed);
         assertEquals(0, run("tones", in, "--watch", "437.5"), complained);
         assertEquals(List.of("start_s,end_s,symbol"), printed.lines().toList());
+        assertEquals(
+                List.of("no tones found in channel 1 of " + in),
+                complained.lines().toList());
+        assertEquals(0, run("tones", in), complained);
+        assertEquals(List.of("start_s,end_s,symbol"), printed.lines().toList());
+        assertEquals(
+                List.of("no tone pairs found in channel 1 of " + in),
+                complained.lines().toList());
     }
 
     private static void expectNear(String line, double start, double end, String symbol) {
@@ -158,12 +166,13 @@ final class TonesCommandTest {
     void wrongUsageIsRefusedInOneLine() throws IOException {
         Path in = Wav.write(folder.resolve("in.wav"), 8000, 1, 16, false, dialled(8000));
         refused(Main.USAGE, "IN.wav", "tones");
-        refused(Main.USAGE, "--channel is 2", "tones", in, "--channel", "2");
-        refused(Main.USAGE, "--channel is 0", "tones", in, "--channel", "0");
+        refused(Main.USAGE, "--channel is 2; it must be 1 to 1 ", "tones", in, "--channel", "2");
+        refused(Main.USAGE, "--channel is 0; it must be 1 to 1 ", "tones", in, "--channel", "0");
         refused(Main.USAGE, "--watch is 3995", "tones", in, "--watch", "1000,3995");
         refused(Main.USAGE, "--watch is 5", "tones", in, "--watch", "5");
         refused(Main.USAGE, "--watch", "tones", in, "--watch", "low");
         refused(Main.USAGE, "--width is 0", "tones", in, "--watch", "1000", "--width", "0");
+        refused(Main.USAGE, "--width is of use with --watch only", "tones", in, "--width", "5");
         refused(Main.USAGE, "never written", "tones", in, "--json", in);
         refused(Main.FAILED, "does not exist", "tones", folder.resolve("none.wav"));
         refused(

@@ -111,8 +111,8 @@ public final class Cascade {
     public Cascade then(Cascade next) {
         Objects.requireNonNull(next, "next");
         if (next.sampleRateHz != sampleRateHz) {
-            throw new IllegalArgumentException("sampleRateHz is " + next.sampleRateHz + "; it must be " + sampleRateHz
-                    + ", as in the cascade it follows");
+            throw new IllegalArgumentException("next's sampleRateHz is " + next.sampleRateHz + "; it must be "
+                    + sampleRateHz + ", as in the cascade it follows");
         }
         List<Section> joined = new ArrayList<>(sections);
         joined.addAll(next.sections);

@@ -66,6 +66,7 @@ class ArgumentsTest {
         add(rows, "from", () -> Glide.along((hz, q, db) -> TWO, null, AT, Pace.SINGLE));
         add(rows, "to", () -> Glide.along((hz, q, db) -> TWO, AT, null, Pace.SINGLE));
         add(rows, "pace", () -> Glide.along((hz, q, db) -> TWO, AT, AT, null));
+        add(rows, "design returned null at " + AT, () -> Glide.along((hz, q, db) -> null, AT, AT, Pace.SINGLE));
         add(rows, "running", () -> Glide.between(TWO, TWO, Pace.SINGLE).inSlotsOf(null));
         add(rows, "from", () -> Pairing.of(null, TWO));
         add(rows, "to", () -> Pairing.of(TWO, null));

@@ -11,8 +11,6 @@ import com.google.gson.JsonParser;
 import io.github.polewright.samples.Sounds;
 import io.github.polewright.samples.Wav;
 import java.io.IOException;
-import java.io.PrintWriter;
-import java.io.StringWriter;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -23,23 +21,10 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
 /** Frequencies of the symbols from ITU-T Q.23. */
-final class TonesCommandTest {
+final class TonesCommandTest extends CommandRun {
 
     @TempDir
     private Path folder;
-
-    private String printed = "";
-    private String complained = "";
-
-    private int run(Object... args) {
-        StringWriter print = new StringWriter();
-        StringWriter complaints = new StringWriter();
-        String[] words = Stream.of(args).map(Object::toString).toArray(String[]::new);
-        int status = Main.run(new PrintWriter(print, true), new PrintWriter(complaints, true), words);
-        printed = print.toString();
-        complained = complaints.toString();
-        return status;
-    }
 
     /** Adds a sine to part of a sound. */
     private static void sound(double[] sound, double rate, double from, double to, double hertz, double levelDb) {

@@ -1,8 +1,10 @@
 package io.github.polewright;
 
+import io.github.polewright.slab.Ranges;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Objects;
 
 /**
  * An ordered list of second-order sections in series, made for one sample rate.
@@ -22,6 +24,11 @@ public final class Cascade {
         if (!(sampleRateHz > 0 && sampleRateHz < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("sampleRateHz is " + sampleRateHz + "; it must be positive and finite");
         }
+        for (int i = 0; i < sections.size(); i++) {
+            if (sections.get(i) == null) {
+                throw new NullPointerException("sections[" + i + "]");
+            }
+        }
         this.sections = List.copyOf(sections);
         if (this.sections.isEmpty()) {
             throw new IllegalArgumentException("a cascade of 0 sections; it must have at least 1");
@@ -36,10 +43,10 @@ public final class Cascade {
      * @param sections at least one
      * @return the cascade
      * @throws IllegalArgumentException if {@code sampleRateHz} is not positive and finite, or there is no section
-     * @throws NullPointerException if a section is null
+     * @throws NullPointerException if {@code sections} or one of them is null
      */
     public static Cascade of(double sampleRateHz, Section... sections) {
-        return new Cascade(sampleRateHz, Arrays.asList(sections));
+        return new Cascade(sampleRateHz, Arrays.asList(Objects.requireNonNull(sections, "sections")));
     }
 
     /**
@@ -49,10 +56,10 @@ public final class Cascade {
      * @param sections at least one; copied
      * @return the cascade
      * @throws IllegalArgumentException if {@code sampleRateHz} is not positive and finite, or there is no section
-     * @throws NullPointerException if a section is null
+     * @throws NullPointerException if {@code sections} or one of them is null
      */
     public static Cascade of(double sampleRateHz, List<Section> sections) {
-        return new Cascade(sampleRateHz, sections);
+        return new Cascade(sampleRateHz, Objects.requireNonNull(sections, "sections"));
     }
 
     /**
@@ -81,6 +88,7 @@ public final class Cascade {
      * @throws IndexOutOfBoundsException if {@code index < 0 || index >= sectionCount()}
      */
     public Section section(int index) {
+        Ranges.index("index", index, sections.size());
         return sections.get(index);
     }
 
@@ -101,9 +109,10 @@ public final class Cascade {
      * @throws IllegalArgumentException if the sample rates differ
      */
     public Cascade then(Cascade next) {
+        Objects.requireNonNull(next, "next");
         if (next.sampleRateHz != sampleRateHz) {
-            throw new IllegalArgumentException("sampleRateHz is " + next.sampleRateHz + "; it must be " + sampleRateHz
-                    + ", as in the cascade it follows");
+            throw new IllegalArgumentException("next's sampleRateHz is " + next.sampleRateHz + "; it must be "
+                    + sampleRateHz + ", as in the cascade it follows");
         }
         List<Section> joined = new ArrayList<>(sections);
         joined.addAll(next.sections);

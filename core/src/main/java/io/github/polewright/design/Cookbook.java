@@ -128,7 +128,7 @@ public final class Cookbook {
         double up = shape.alpha() * a;
         double down = shape.alpha() / a;
         double middle = -2 * shape.half().cosOfWhole();
-        return checked(q, gainDb, 1 + up, middle, 1 - up, 1 + down, middle, 1 - down);
+        return checked(shape, gainDb, 1 + up, middle, 1 - up, 1 + down, middle, 1 - down);
     }
 
     /**
@@ -151,7 +151,7 @@ public final class Cookbook {
         double top = a * low + high;
         double bottom = a * high + low;
         return checked(
-                q,
+                shape,
                 gainDb,
                 a * (top + bend),
                 2 * a * (a * low - high),
@@ -180,7 +180,7 @@ public final class Cookbook {
         double top = a * high + low;
         double bottom = a * low + high;
         return checked(
-                q,
+                shape,
                 gainDb,
                 a * (top + bend),
                 -2 * a * (a * high - low),
@@ -247,12 +247,16 @@ public final class Cookbook {
     }
 
     private static Section checked(
-            double q, double gainDb, double b0, double b1, double b2, double a0, double a1, double a2) {
+            Shape shape, double gainDb, double b0, double b1, double b2, double a0, double a1, double a2) {
         if (!Double.isFinite(b0 / a0 + b1 / a0 + b2 / a0 + a1 / a0 + a2 / a0)) {
             throw Check.refused("gainDb", gainDb, "nearer to 0; a coefficient is not finite");
         }
         Section section = Section.normalized(b0, b1, b2, a0, a1, a2);
-        return Check.stable(section, "q", q, "less extreme at " + gainDb + " dB");
+        if (!section.isStable()) {
+            // Throws if q is to blame: at 0 dB the denominator is that of the other six.
+            shape.section(1, 0, 0);
+        }
+        return Check.stable(section, "gainDb", gainDb, "nearer to 0 with a q of " + shape.q());
     }
 
     /** What six of the nine shapes share: {@code a = 1 + alpha, -2 cos w0, 1 - alpha}. */

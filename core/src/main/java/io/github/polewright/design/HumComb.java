@@ -14,8 +14,8 @@ import java.util.Objects;
  * returns a changed copy; the order of calls does not matter. Full-wave rectified hum has only even lines, magnetic
  * pick-up mostly odd ones.
  *
- * <p>A line is left out where it does not fit: its centre must lie below half the sample rate, and the centre less and
- * plus half the width between 0 and half the sample rate.
+ * <p>A line is left out where it does not fit: its centre plus half its width must lie below half the sample rate.
+ * Notches as wide as the fundamental would leave nothing between the lines, and are refused.
  *
  * <p><b>Units</b> hertz, decibels. <b>Threads</b> immutable. <b>Errors</b> {@link IllegalArgumentException}.
  * <b>Numbers</b> a notch rings for about {@code 2.2 / widthHz} seconds down to -60 dB. A drift of the fundamental by
@@ -66,15 +66,15 @@ public final class HumComb {
     /**
      * At most so many notches, counted from the lowest line wished for.
      *
-     * @param count at least 1; lines that do not fit below Nyquist are left out
+     * @param lines at least 1; lines that do not fit below Nyquist are left out
      * @return the changed wish
-     * @throws IllegalArgumentException if {@code count < 1}
+     * @throws IllegalArgumentException if {@code lines < 1}
      */
-    public HumComb lines(int count) {
-        if (count < 1) {
-            throw new IllegalArgumentException("count is " + count + "; it must be at least 1");
+    public HumComb lines(int lines) {
+        if (lines < 1) {
+            throw new IllegalArgumentException("lines is " + lines + "; it must be at least 1");
         }
-        return new HumComb(fundamentalHz, firstLine, lineStep, count, widthHz, growing, depthDb);
+        return new HumComb(fundamentalHz, firstLine, lineStep, lines, widthHz, growing, depthDb);
     }
 
     /**
@@ -116,12 +116,12 @@ public final class HumComb {
     /**
      * The width of each notch, or of line 1 where widths grow.
      *
-     * @param widthHz in hertz, see {@link HumNotch}
+     * @param widthHz in hertz, above 0 and below the fundamental, see {@link HumNotch}
      * @return the changed wish
-     * @throws IllegalArgumentException if {@code widthHz} is not positive and finite
+     * @throws IllegalArgumentException if {@code widthHz} is not in its range
      */
     public HumComb widthHz(double widthHz) {
-        Check.positive("widthHz", widthHz);
+        checkWidth(fundamentalHz, widthHz);
         return new HumComb(fundamentalHz, firstLine, lineStep, count, widthHz, growing, depthDb);
     }
 
@@ -153,10 +153,11 @@ public final class HumComb {
      * @param sampleRateHz the sample rate in hertz
      * @return the cascade
      * @throws IllegalArgumentException if {@code sampleRateHz} is not positive and finite, no line fits below half of
-     *     it, or a width is so small that the poles round to the unit circle
+     *     it, the width is not below the fundamental, or so small that the poles round to the unit circle
      */
     public Cascade design(double sampleRateHz) {
         Check.sampleRate(sampleRateHz);
+        checkWidth(fundamentalHz, widthHz);
         double floor = HumNotch.floor(depthDb);
         List<Section> notches = new ArrayList<>();
         for (long line = firstLine; notches.size() < count; line += lineStep) {
@@ -165,9 +166,7 @@ public final class HumComb {
             if (!(centreHz + lineWidthHz / 2 < sampleRateHz / 2)) {
                 break;
             }
-            if (centreHz - lineWidthHz / 2 > 0) {
-                notches.add(HumNotch.ofWidth(sampleRateHz, centreHz, lineWidthHz, floor));
-            }
+            notches.add(HumNotch.ofWidth(sampleRateHz, centreHz, lineWidthHz, floor));
         }
         if (notches.isEmpty()) {
             throw new IllegalArgumentException("fundamentalHz is " + fundamentalHz + " with a width of " + widthHz
@@ -175,6 +174,12 @@ public final class HumComb {
                     + ", half the sample rate");
         }
         return Cascade.of(sampleRateHz, notches);
+    }
+
+    private static void checkWidth(double fundamentalHz, double widthHz) {
+        if (!(widthHz > 0 && widthHz < fundamentalHz)) {
+            throw Check.refused("widthHz", widthHz, "above 0 and below " + fundamentalHz + ", the fundamental");
+        }
     }
 
     @Override

@@ -2,8 +2,10 @@ package io.github.polewright.inspect;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.slab.Ranges;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 import java.util.function.DoubleUnaryOperator;
 
 /**
@@ -39,7 +41,7 @@ public final class Response {
      * @return its response
      */
     public static Response of(Cascade cascade) {
-        return new Response(cascade);
+        return new Response(Objects.requireNonNull(cascade, "cascade"));
     }
 
     /**
@@ -51,7 +53,7 @@ public final class Response {
      * @throws IllegalArgumentException if {@code sampleRateHz} is not positive and finite
      */
     public static Response of(double sampleRateHz, Section section) {
-        return new Response(Cascade.of(sampleRateHz, section));
+        return new Response(Cascade.of(sampleRateHz, Objects.requireNonNull(section, "section")));
     }
 
     /**
@@ -161,7 +163,7 @@ public final class Response {
     }
 
     private static double[] onGrid(double[] frequenciesHz, DoubleUnaryOperator value) {
-        double[] values = new double[frequenciesHz.length];
+        double[] values = new double[Objects.requireNonNull(frequenciesHz, "frequenciesHz").length];
         for (int i = 0; i < values.length; i++) {
             values[i] = value.applyAsDouble(frequenciesHz[i]);
         }
@@ -237,7 +239,7 @@ public final class Response {
      * @throws IndexOutOfBoundsException if {@code section < 0} or it is not below the section count
      */
     public double noiseGain(int section) {
-        cascade.section(section);
+        Ranges.index("section", section, cascade.sectionCount());
         return new NoiseGain(cascade).ofSection(section);
     }
 

@@ -12,7 +12,7 @@ final class Fit {
     private Fit() {}
 
     static void checkRate(Cascade target, double sampleRateHz) {
-        if (target.sampleRateHz() != sampleRateHz) {
+        if (Objects.requireNonNull(target, "target").sampleRateHz() != sampleRateHz) {
             throw new IllegalArgumentException(
                     "target's sampleRateHz is " + target.sampleRateHz() + "; it must be " + sampleRateHz);
         }

@@ -95,8 +95,8 @@ public final class LiveCascade {
      * @throws IndexOutOfBoundsException if a range does not lie in its array
      */
     public void process(float[] source, int sourceOffset, float[] destination, int destinationOffset, int frames) {
-        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
-        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.interleaved("source", source, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination, destinationOffset, frames, channels);
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         begin();
         for (int done = 0; done < frames; ) {
@@ -121,8 +121,8 @@ public final class LiveCascade {
      * @throws IndexOutOfBoundsException if a range does not lie in its array
      */
     public void process(double[] source, int sourceOffset, double[] destination, int destinationOffset, int frames) {
-        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
-        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.interleaved("source", source, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination, destinationOffset, frames, channels);
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         begin();
         for (int done = 0; done < frames; ) {
@@ -239,15 +239,15 @@ public final class LiveCascade {
      * {@link #retune(Cascade)}.
      *
      * @param target the cascade to become
-     * @param chosen how long and how evenly
+     * @param pace how long and how evenly
      * @return the glide that was handed over
      * @throws IllegalArgumentException as {@link #retune(Cascade)}
      */
-    public Glide retune(Cascade target, Pace chosen) {
-        Objects.requireNonNull(chosen, "pace");
+    public Glide retune(Cascade target, Pace pace) {
+        Objects.requireNonNull(pace, "pace");
         Fit.checkRate(target, sampleRateHz);
         Fit.check(target, mostSections);
-        return orders.retune(target, chosen);
+        return orders.retune(target, pace);
     }
 
     /**
@@ -368,6 +368,12 @@ public final class LiveCascade {
      */
     public long channelRestarts() {
         return restarts.getAcquire();
+    }
+
+    /** Form, channels, sample rate and sections in one line. Any thread; reads nothing that the audio thread writes. */
+    @Override
+    public String toString() {
+        return form + " at " + sampleRateHz + " Hz, channels: " + channels + ", sections at most: " + mostSections;
     }
 
     private void begin() {

@@ -26,46 +26,46 @@ public final class LiveCascadeBuilder {
     /**
      * Channels of every frame; 1 unless said.
      *
-     * @param count 1 to 1024
+     * @param channels 1 to 1024
      * @return this
-     * @throws IllegalArgumentException if {@code count} is out of range
+     * @throws IllegalArgumentException if {@code channels} is out of range
      */
-    public LiveCascadeBuilder channels(int count) {
-        channels = inRange("channels", count, 1, MOST_CHANNELS);
+    public LiveCascadeBuilder channels(int channels) {
+        this.channels = inRange("channels", channels, 1, MOST_CHANNELS);
         return this;
     }
 
     /**
      * The form a steady section is computed in; direct form I unless said.
      *
-     * @param choice the form
+     * @param form the form
      * @return this
      */
-    public LiveCascadeBuilder form(Form choice) {
-        form = Objects.requireNonNull(choice, "form");
+    public LiveCascadeBuilder form(Form form) {
+        this.form = Objects.requireNonNull(form, "form");
         return this;
     }
 
     /**
      * The most sections a target of {@link LiveCascade#retune} may have; as many as the first cascade has unless said.
      *
-     * @param count from the first cascade's own count to 1024
+     * @param mostSections from the first cascade's own count to 1024
      * @return this
-     * @throws IllegalArgumentException if {@code count} is out of range
+     * @throws IllegalArgumentException if {@code mostSections} is out of range
      */
-    public LiveCascadeBuilder mostSections(int count) {
-        mostSections = inRange("mostSections", count, cascade.sectionCount(), MOST_SECTIONS);
+    public LiveCascadeBuilder mostSections(int mostSections) {
+        this.mostSections = inRange("mostSections", mostSections, cascade.sectionCount(), MOST_SECTIONS);
         return this;
     }
 
     /**
      * How long and how evenly a retune glides that says nothing else; {@link Pace#SINGLE} unless said.
      *
-     * @param choice the pace; a glide is never faster than is certified
+     * @param pace a glide is never faster than is certified
      * @return this
      */
-    public LiveCascadeBuilder pace(Pace choice) {
-        pace = Objects.requireNonNull(choice, "pace");
+    public LiveCascadeBuilder pace(Pace pace) {
+        this.pace = Objects.requireNonNull(pace, "pace");
         return this;
     }
 

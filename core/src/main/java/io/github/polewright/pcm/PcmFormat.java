@@ -110,9 +110,11 @@ public final class PcmFormat {
      * @param destination receives the samples; the rest of it is not touched
      * @param destinationOffset samples before the first one
      * @param samples how many; frames times channels
+     * @throws NullPointerException if an array is null
      * @throws IndexOutOfBoundsException if a range does not lie inside its array
      */
     public void decode(byte[] source, int sourceOffset, float[] destination, int destinationOffset, int samples) {
+        requireArrays(source, destination);
         checkRange("source", source.length, sourceOffset, samples, bytesPerSample());
         checkRange("destination", destination.length, destinationOffset, samples, 1);
         int step = bytesPerSample();
@@ -129,9 +131,11 @@ public final class PcmFormat {
      * @param destination receives the samples; the rest of it is not touched
      * @param destinationOffset samples before the first one
      * @param samples how many; frames times channels
+     * @throws NullPointerException if an array is null
      * @throws IndexOutOfBoundsException if a range does not lie inside its array
      */
     public void decode(byte[] source, int sourceOffset, double[] destination, int destinationOffset, int samples) {
+        requireArrays(source, destination);
         checkRange("source", source.length, sourceOffset, samples, bytesPerSample());
         checkRange("destination", destination.length, destinationOffset, samples, 1);
         int step = bytesPerSample();
@@ -149,9 +153,11 @@ public final class PcmFormat {
      * @param destinationOffset bytes before the first sample
      * @param samples how many; frames times channels
      * @return how many samples were clipped, or were NaN where the format has none
+     * @throws NullPointerException if an array is null
      * @throws IndexOutOfBoundsException if a range does not lie inside its array
      */
     public int encode(float[] source, int sourceOffset, byte[] destination, int destinationOffset, int samples) {
+        requireArrays(source, destination);
         checkRange("source", source.length, sourceOffset, samples, 1);
         checkRange("destination", destination.length, destinationOffset, samples, bytesPerSample());
         int step = bytesPerSample();
@@ -171,9 +177,11 @@ public final class PcmFormat {
      * @param destinationOffset bytes before the first sample
      * @param samples how many; frames times channels
      * @return how many samples were clipped, or were NaN where the format has none
+     * @throws NullPointerException if an array is null
      * @throws IndexOutOfBoundsException if a range does not lie inside its array
      */
     public int encode(double[] source, int sourceOffset, byte[] destination, int destinationOffset, int samples) {
+        requireArrays(source, destination);
         checkRange("source", source.length, sourceOffset, samples, 1);
         checkRange("destination", destination.length, destinationOffset, samples, bytesPerSample());
         int step = bytesPerSample();
@@ -182,6 +190,11 @@ public final class PcmFormat {
             clipped += write(source[sourceOffset + i], destination, destinationOffset + i * step);
         }
         return clipped;
+    }
+
+    private static void requireArrays(Object source, Object destination) {
+        Objects.requireNonNull(source, "source");
+        Objects.requireNonNull(destination, "destination");
     }
 
     private static void checkRange(String name, int length, int offset, int samples, int unitsPerSample) {

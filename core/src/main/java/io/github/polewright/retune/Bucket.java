@@ -1,5 +1,7 @@
 package io.github.polewright.retune;
 
+import io.github.polewright.slab.Ranges;
+
 /**
  * What recent changes together can have done to each section, and a limit on it. A single certified change bounds
  * itself; a chain of them does not, however small each one is.
@@ -11,7 +13,7 @@ package io.github.polewright.retune;
  * still drive the output without limit. Derived for this project.
  *
  * <p><b>Units</b> levels are natural logarithms of a factor. <b>Threads</b> one at a time, made for the audio thread.
- * <b>Allocation</b> none after construction. <b>Errors</b> an index outside the sections throws.
+ * <b>Allocation</b> none after construction. <b>Errors</b> an index outside the sections is refused.
  */
 public final class Bucket {
 
@@ -73,6 +75,7 @@ public final class Bucket {
      * @param leakPerFrame from {@link #leak}
      */
     public void leakAt(int section, double leakPerFrame) {
+        checkSection(section);
         settle();
         leaks[section] = leakPerFrame;
     }
@@ -85,6 +88,7 @@ public final class Bucket {
      * @return true if {@link #charge} keeps the promise
      */
     public boolean admits(int section, double distance) {
+        checkSection(section);
         settle();
         return levels[section] == 0 || levels[section] + 0.5 * distance <= limit;
     }
@@ -111,6 +115,7 @@ public final class Bucket {
      * @param distance d of the change, or an upper bound of it
      */
     public void charge(int section, double distance) {
+        checkSection(section);
         settle();
         levels[section] += 0.5 * distance;
     }
@@ -122,6 +127,7 @@ public final class Bucket {
      * @return G; the state has grown at most e^G-fold by changes
      */
     public double level(int section) {
+        checkSection(section);
         // Not settled: when a level is asked for must not change how its sums are rounded.
         return Math.max(0, levels[section] - leaks[section] * passed);
     }
@@ -132,6 +138,10 @@ public final class Bucket {
         for (int i = 0; i < levels.length; i++) {
             levels[i] = 0;
         }
+    }
+
+    private void checkSection(int section) {
+        Ranges.index("section", section, levels.length);
     }
 
     private void settle() {

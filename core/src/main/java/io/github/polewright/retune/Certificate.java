@@ -123,7 +123,9 @@ public final class Certificate {
         String what =
                 switch (rule) {
                     case STILL -> "the poles stay";
-                    case EXCHANGE -> "it fades, and once it rings no more another is born in its place";
+                    case EXCHANGE ->
+                        "it fades, and once it rings no more another is born in its place, in " + knots.totalFrames()
+                                + " frames";
                     case PAIR ->
                         decimals("the poles move by d = %.3g and may jump, one norm contracts all the way", distance);
                     case RAMP ->

@@ -1,6 +1,7 @@
 package io.github.polewright.retune;
 
 import io.github.polewright.Section;
+import java.util.Objects;
 
 /**
  * How far apart two stable sections are, in the two measures that bound what a change between them can do.
@@ -135,7 +136,7 @@ public final class Distance {
     }
 
     private static void requireStable(String name, Section section) {
-        if (!section.isStable()) {
+        if (!Objects.requireNonNull(section, name).isStable()) {
             throw new IllegalArgumentException(
                     name + " is " + section + "; its poles must lie strictly inside the unit circle");
         }

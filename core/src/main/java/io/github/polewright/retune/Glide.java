@@ -2,6 +2,8 @@ package io.github.polewright.retune;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.slab.Ranges;
+import java.util.Objects;
 
 /**
  * A path from one cascade to another: coefficient knots, and how many frames lie between them. Between two knots every
@@ -59,6 +61,7 @@ public final class Glide {
      *     stable or so near to it that its ramp would be endless
      */
     public static Glide between(Cascade from, Cascade to, Pace pace) {
+        requireEnds(from, to, pace);
         return GlidePlan.straight(from, to, pace);
     }
 
@@ -78,6 +81,7 @@ public final class Glide {
      * @throws RefusedGlideException as {@link #between}
      */
     public static Glide sweeping(Cascade from, Cascade to, Pace pace) {
+        requireEnds(from, to, pace);
         return GlidePlan.sweeping(from, to, pace);
     }
 
@@ -94,7 +98,15 @@ public final class Glide {
      *     or so near to it that its ramp would be endless
      */
     public static Glide along(CascadeDesign design, Setting from, Setting to, Pace pace) {
+        Objects.requireNonNull(design, "design");
+        requireEnds(from, to, pace);
         return GlidePlan.along(design, from, to, pace);
+    }
+
+    private static void requireEnds(Object from, Object to, Pace pace) {
+        Objects.requireNonNull(from, "from");
+        Objects.requireNonNull(to, "to");
+        Objects.requireNonNull(pace, "pace");
     }
 
     /**
@@ -147,8 +159,10 @@ public final class Glide {
      *
      * @param segment 0 is the first
      * @return frames; 0 for a swap
+     * @throws IndexOutOfBoundsException if there is no such segment
      */
     public int frames(int segment) {
+        Ranges.index("segment", segment, segmentCount());
         return knots.frames(segment);
     }
 
@@ -158,11 +172,7 @@ public final class Glide {
      * @return frames
      */
     public long totalFrames() {
-        long total = 0;
-        for (int i = 0; i < knots.segmentCount(); i++) {
-            total += knots.frames(i);
-        }
-        return total;
+        return knots.totalFrames();
     }
 
     /**
@@ -172,8 +182,12 @@ public final class Glide {
      * @param section its slot
      * @param which 0 to 4 for b0, b1, b2, a1, a2
      * @return the coefficient
+     * @throws IndexOutOfBoundsException if an index is out of range
      */
     public double coefficient(int knot, int section, int which) {
+        Ranges.index("knot", knot, segmentCount() + 1);
+        Ranges.index("section", section, sectionCount);
+        Ranges.index("which", which, Knots.WIDTH);
         return knots.at(knot)[section * Knots.WIDTH + which];
     }
 
@@ -183,8 +197,10 @@ public final class Glide {
      * @param segment 0 is the first
      * @param section its slot
      * @return d, 0 for a swap
+     * @throws IndexOutOfBoundsException if an index is out of range
      */
     public double distance(int segment, int section) {
+        checkPlace(segment, section);
         return distances[segment][section];
     }
 
@@ -194,9 +210,16 @@ public final class Glide {
      * @param segment 0 is the first
      * @param section its slot
      * @return the loss in one frame
+     * @throws IndexOutOfBoundsException if an index is out of range
      */
     public double leak(int segment, int section) {
+        checkPlace(segment, section);
         return leaks[segment][section];
+    }
+
+    private void checkPlace(int segment, int section) {
+        Ranges.index("segment", segment, segmentCount());
+        Ranges.index("section", section, sectionCount);
     }
 
     /**
@@ -204,8 +227,10 @@ public final class Glide {
      *
      * @param section its slot
      * @return the certificate
+     * @throws IndexOutOfBoundsException if there is no such slot
      */
     public Certificate certificate(int section) {
+        Ranges.index("section", section, sectionCount);
         return certificates[section];
     }
 
@@ -218,7 +243,7 @@ public final class Glide {
      * @throws RefusedGlideException if the sample rates differ or there are not enough slots
      */
     public Glide inSlotsOf(Cascade running) {
-        if (running.equals(from)) {
+        if (Objects.requireNonNull(running, "running").equals(from)) {
             return this;
         }
         return SlotOrder.arrange(this, running);

@@ -4,6 +4,7 @@ import io.github.polewright.Cascade;
 import io.github.polewright.Section;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Objects;
 import java.util.function.DoubleFunction;
 
 /** Makes glides: chooses knots and lengths, and certifies each section before anything is handed over. */
@@ -127,6 +128,7 @@ final class GlidePlan {
     }
 
     private static void requireAlike(Cascade first, Cascade knot, Setting at) {
+        Objects.requireNonNull(knot, () -> "design returned null at " + at);
         if (knot.sampleRateHz() != first.sampleRateHz() || knot.sectionCount() != first.sectionCount()) {
             throw new RefusedGlideException(
                     -1,

@@ -22,6 +22,14 @@ final class Knots {
         return frames[segment];
     }
 
+    long totalFrames() {
+        long total = 0;
+        for (int length : frames) {
+            total += length;
+        }
+        return total;
+    }
+
     double[] at(int knot) {
         return coefficients[knot];
     }

@@ -48,6 +48,13 @@ public final class Pace {
         return new Pace(gentle, certifiedFactor, Math.max(leastSeconds, seconds), secondsPerOctave);
     }
 
+    /** The pace in one line. */
+    @Override
+    public String toString() {
+        return (gentle ? "gentle" : "even") + ", " + certifiedFactor + " times the certified length, at least "
+                + leastSeconds + " s and " + secondsPerOctave + " s an octave";
+    }
+
     /** Whether the glide starts and ends gently (smoothstep, 3u^2 - 2u^3) rather than at an even speed. */
     boolean isGentle() {
         return gentle;

@@ -2,7 +2,9 @@ package io.github.polewright.retune;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.slab.Ranges;
 import java.util.Arrays;
+import java.util.Objects;
 
 /**
  * Which section of a target each section of a running cascade turns into. The order of the target is changed, never the
@@ -50,8 +52,8 @@ public final class Pairing {
      *     stable
      */
     public static Pairing of(Cascade from, Cascade to) {
-        int[] olds = present(from);
-        int[] news = present(to);
+        int[] olds = present(Objects.requireNonNull(from, "from"));
+        int[] news = present(Objects.requireNonNull(to, "to"));
         if (news.length > from.sectionCount()) {
             throw new RefusedGlideException(
                     -1,
@@ -73,9 +75,10 @@ public final class Pairing {
      *
      * @param slot its index in the running cascade
      * @return the index of the target's section, or -1 if the slot will pass through
+     * @throws IndexOutOfBoundsException if there is no such slot
      */
     public int target(int slot) {
-        return targets[slot];
+        return targets[checked(slot)];
     }
 
     /**
@@ -83,9 +86,10 @@ public final class Pairing {
      *
      * @param slot its index in the running cascade
      * @return true for a birth
+     * @throws IndexOutOfBoundsException if there is no such slot
      */
     public boolean isBorn(int slot) {
-        return born[slot];
+        return born[checked(slot)];
     }
 
     /**
@@ -93,9 +97,10 @@ public final class Pairing {
      *
      * @param slot its index in the running cascade
      * @return true for a death
+     * @throws IndexOutOfBoundsException if there is no such slot
      */
     public boolean isDying(int slot) {
-        return dying[slot];
+        return dying[checked(slot)];
     }
 
     /**
@@ -103,9 +108,15 @@ public final class Pairing {
      *
      * @param slot its index in the running cascade
      * @return true for a notch or bell that is too far from its target
+     * @throws IndexOutOfBoundsException if there is no such slot
      */
     public boolean isExchanged(int slot) {
-        return exchanged[slot];
+        return exchanged[checked(slot)];
+    }
+
+    private int checked(int slot) {
+        Ranges.index("slot", slot, targets.length);
+        return slot;
     }
 
     private static int[] present(Cascade cascade) {

@@ -1,7 +1,9 @@
 package io.github.polewright.retune;
 
 import io.github.polewright.Cascade;
+import io.github.polewright.slab.Ranges;
 import java.util.Arrays;
+import java.util.Objects;
 
 /**
  * Goes along glides frame by frame on the audio thread: says for each stretch of frames from where and by which step the
@@ -55,7 +57,7 @@ public final class Walk {
      * @throws IllegalArgumentException if a section is not stable, or {@code limit} is not positive and finite
      */
     public Walk(Cascade start, double limit) {
-        if (!start.isStable()) {
+        if (!Objects.requireNonNull(start, "start").isStable()) {
             throw new IllegalArgumentException("start is not stable: " + start);
         }
         sampleRateHz = start.sampleRateHz();
@@ -75,6 +77,7 @@ public final class Walk {
      * @return false, with nothing changed, if its sample rate or number of sections is not the one of this walk
      */
     public boolean adopt(Glide next) {
+        Objects.requireNonNull(next, "next");
         if (next.sectionCount() != slots || next.sampleRateHz() != sampleRateHz) {
             return false;
         }
@@ -212,6 +215,7 @@ public final class Walk {
      * @return a natural logarithm, 0 or more
      */
     public double level(int slot) {
+        Ranges.index("slot", slot, slots);
         return bucket.level(slot);
     }
 

@@ -4,6 +4,14 @@
  * by which rule and by how much, {@link io.github.polewright.retune.Bucket the bucket} holds back what many glides
  * together could do, and {@link io.github.polewright.retune.Walk the walk} is how an audio thread goes along it.
  *
+ * <p><b>Where to start</b> A user of a live cascade needs {@link io.github.polewright.retune.Pace} (how long and how
+ * evenly), {@link io.github.polewright.retune.Glide} with its {@link io.github.polewright.retune.Certificate} (what will
+ * happen and what it can do), {@link io.github.polewright.retune.CascadeDesign} and {@link
+ * io.github.polewright.retune.Setting} (a glide through a design of one's own), and at times {@link
+ * io.github.polewright.retune.Pairing} (which section becomes which). {@link io.github.polewright.retune.Walk}, {@link
+ * io.github.polewright.retune.Bucket} and {@link io.github.polewright.retune.Distance} are for building an engine of
+ * one's own; the live cascade has them inside.
+ *
  * <p>That every coefficient set on the way is stable bounds nothing: two stable sets in alternation can grow without
  * limit. Published results on this: J. Laroche, "On the stability of time-varying recursive filters", JAES 55(6),
  * 2007 (one change of basis in which every state matrix contracts); R. Shorten and K. Narendra, IEEE Transactions on

@@ -2,11 +2,58 @@ package io.github.polewright.slab;
 
 import java.nio.ByteOrder;
 import java.nio.FloatBuffer;
+import java.util.Objects;
 
-/** The checks of a block's arguments, made before any sample or state is touched. */
+/** The checks of a block's arguments and of indices, made before any sample or state is touched. */
 public final class Ranges {
 
     private Ranges() {}
+
+    /**
+     * Checks an index.
+     *
+     * @param name of the argument, for the message
+     * @param index to be 0 to {@code count - 1}
+     * @param count how many there are
+     * @throws IndexOutOfBoundsException if {@code index < 0 || index >= count}
+     */
+    public static void index(String name, int index, int count) {
+        if (index < 0 || index >= count) {
+            throw new IndexOutOfBoundsException(name + " is " + index + "; it must be 0 to " + (count - 1));
+        }
+    }
+
+    /**
+     * Checks an array of interleaved samples and a range of it.
+     *
+     * @param name of the argument, for the message
+     * @param samples interleaved
+     * @param offset of the first sample
+     * @param frames in the block
+     * @param channels samples a frame
+     * @throws NullPointerException if {@code samples} is null
+     * @throws IllegalArgumentException if {@code frames < 0}
+     * @throws IndexOutOfBoundsException if {@code offset < 0} or the range ends beyond the array
+     */
+    public static void interleaved(String name, float[] samples, int offset, int frames, int channels) {
+        interleaved(name, Objects.requireNonNull(samples, name).length, offset, frames, channels);
+    }
+
+    /**
+     * Checks an array of interleaved samples and a range of it.
+     *
+     * @param name of the argument, for the message
+     * @param samples interleaved
+     * @param offset of the first sample
+     * @param frames in the block
+     * @param channels samples a frame
+     * @throws NullPointerException if {@code samples} is null
+     * @throws IllegalArgumentException if {@code frames < 0}
+     * @throws IndexOutOfBoundsException if {@code offset < 0} or the range ends beyond the array
+     */
+    public static void interleaved(String name, double[] samples, int offset, int frames, int channels) {
+        interleaved(name, Objects.requireNonNull(samples, name).length, offset, frames, channels);
+    }
 
     /**
      * Checks a range of interleaved samples.
@@ -54,6 +101,7 @@ public final class Ranges {
      * @param offset of the first frame in every array
      * @param frames in the block
      * @param channels planes expected
+     * @throws NullPointerException if an argument or a plane is null
      * @throws IllegalArgumentException if {@code frames < 0}, a count of planes is not {@code channels}, or a plane is
      *     both read for one channel and written for another
      * @throws IndexOutOfBoundsException if {@code offset < 0} or a plane is too short
@@ -73,11 +121,14 @@ public final class Ranges {
     }
 
     private static void planes(String name, float[][] planes, int offset, int frames, int channels) {
-        if (planes.length != channels) {
+        if (Objects.requireNonNull(planes, name).length != channels) {
             throw new IllegalArgumentException(
                     name + " has " + planes.length + " planes; it must have " + channels + ", one a channel");
         }
         for (int channel = 0; channel < channels; channel++) {
+            if (planes[channel] == null) {
+                throw new NullPointerException(name + " plane " + channel);
+            }
             int length = planes[channel].length;
             if (offset < 0 || frames > (long) length - offset) {
                 throw new IndexOutOfBoundsException(name + " plane " + channel + " holds " + length + " samples; "
@@ -94,13 +145,14 @@ public final class Ranges {
      * @param written whether it will be written
      * @param frames in the block
      * @param channels samples a frame
+     * @throws NullPointerException if {@code buffer} is null
      * @throws IllegalArgumentException if {@code frames < 0}, or the buffer is not direct, not in native order, or
      *     read-only though it would be written
      * @throws IndexOutOfBoundsException if fewer than {@code frames * channels} samples remain
      */
     public static void direct(String name, FloatBuffer buffer, boolean written, int frames, int channels) {
         frames(frames);
-        if (!buffer.isDirect()) {
+        if (!Objects.requireNonNull(buffer, name).isDirect()) {
             throw new IllegalArgumentException(name + " is a heap buffer; it must be direct (pass arrays otherwise)");
         }
         if (buffer.order() != ByteOrder.nativeOrder()) {

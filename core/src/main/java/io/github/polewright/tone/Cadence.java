@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import java.util.Arrays;
+import java.util.Objects;
 
 /**
  * A call-progress signal by its numbers: the frequencies that sound together, and for how long they are on and off in
@@ -30,6 +31,8 @@ public final class Cadence {
      * @throws IllegalArgumentException if a count or a value is outside its range
      */
     public static Cadence of(double[] frequenciesHz, double... onOffSeconds) {
+        Objects.requireNonNull(frequenciesHz, "frequenciesHz");
+        Objects.requireNonNull(onOffSeconds, "onOffSeconds");
         if (onOffSeconds.length < 2 || onOffSeconds.length > 16 || onOffSeconds.length % 2 != 0) {
             throw new IllegalArgumentException(
                     "onOffSeconds has " + onOffSeconds.length + " intervals; it must have an even number, 2 to 16");
@@ -54,6 +57,7 @@ public final class Cadence {
     }
 
     private static double[] checked(double[] frequenciesHz) {
+        Objects.requireNonNull(frequenciesHz, "frequenciesHz");
         if (frequenciesHz.length < 1 || frequenciesHz.length > 4) {
             throw new IllegalArgumentException(
                     "frequenciesHz has " + frequenciesHz.length + " frequencies; it must have 1 to 4");
@@ -67,13 +71,13 @@ public final class Cadence {
     /**
      * The same cadence with another tolerance: an interval may differ by this share, and by 10 ms besides.
      *
-     * @param share 0 to 0.5
+     * @param tolerance 0 to 0.5, a share of the interval
      * @return the changed copy
      * @throws IllegalArgumentException if the value is outside its range
      */
-    public Cadence withTolerance(double share) {
-        Tone.check("share", share, 0, 0.5);
-        return new Cadence(frequenciesHz, intervalsSeconds, share);
+    public Cadence withTolerance(double tolerance) {
+        Tone.check("tolerance", tolerance, 0, 0.5);
+        return new Cadence(frequenciesHz, intervalsSeconds, tolerance);
     }
 
     /**

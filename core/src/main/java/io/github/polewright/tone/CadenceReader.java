@@ -183,61 +183,63 @@ public final class CadenceReader {
         /**
          * One more cadence.
          *
-         * @param wanted the cadence
+         * @param cadence the cadence
          * @return this
          */
-        public Builder cadence(Cadence wanted) {
-            cadences.add(wanted);
+        public Builder cadence(Cadence cadence) {
+            cadences.add(Objects.requireNonNull(cadence, "cadence"));
             return this;
         }
 
         /**
          * How many cycles make a cadence; 2 unless set.
          *
-         * @param count 1 to 10
+         * @param cycles 1 to 10
          * @return this
          * @throws IllegalArgumentException if the value is outside its range
          */
-        public Builder cycles(int count) {
-            Tone.check("count", count, 1, 10);
-            cycles = count;
+        public Builder cycles(int cycles) {
+            if (cycles < 1 || cycles > 10) {
+                throw new IllegalArgumentException("cycles is " + cycles + "; it must be 1 to 10");
+            }
+            this.cycles = cycles;
             return this;
         }
 
         /**
          * Which channel of how many is read; channel 0 of 1 unless set.
          *
-         * @param index 0 is the first
-         * @param count channels in a frame, at least 1
+         * @param channel 0 is the first
+         * @param channels in a frame, at least 1
          * @return this
          */
-        public Builder channel(int index, int count) {
-            channel = index;
-            channels = count;
+        public Builder channel(int channel, int channels) {
+            this.channel = channel;
+            this.channels = channels;
             return this;
         }
 
         /**
          * The level from which a tone counts as on; −40 dBFS unless set.
          *
-         * @param dbfs −200 to 0 dBFS
+         * @param thresholdDbfs −200 to 0 dBFS
          * @return this
          * @throws IllegalArgumentException if the value is outside its range
          */
-        public Builder threshold(double dbfs) {
-            Tone.check("dbfs", dbfs, -200, 0);
-            thresholdDbfs = dbfs;
+        public Builder threshold(double thresholdDbfs) {
+            Tone.check("thresholdDbfs", thresholdDbfs, -200, 0);
+            this.thresholdDbfs = thresholdDbfs;
             return this;
         }
 
         /**
          * How many events wait at most; 64 unless set.
          *
-         * @param events 1 to 2^20
+         * @param eventCapacity 1 to 2^20
          * @return this
          */
-        public Builder eventCapacity(int events) {
-            eventCapacity = events;
+        public Builder eventCapacity(int eventCapacity) {
+            this.eventCapacity = eventCapacity;
             return this;
         }
 

@@ -1,6 +1,7 @@
 package io.github.polewright.tone;
 
 import io.github.polewright.slab.Ranges;
+import java.util.Objects;
 import java.util.concurrent.atomic.AtomicLong;
 
 /**
@@ -47,7 +48,7 @@ final class Intake {
     }
 
     void interleaved(float[] source, int offset, int frames) {
-        Ranges.interleaved("source", source.length, offset, frames, channels);
+        Ranges.interleaved("source", source, offset, frames, channels);
         int next = offset + channel;
         for (int left = frames; left > 0; ) {
             int count = room(left);
@@ -60,7 +61,7 @@ final class Intake {
     }
 
     void interleaved(double[] source, int offset, int frames) {
-        Ranges.interleaved("source", source.length, offset, frames, channels);
+        Ranges.interleaved("source", source, offset, frames, channels);
         int next = offset + channel;
         for (int left = frames; left > 0; ) {
             int count = room(left);
@@ -73,11 +74,11 @@ final class Intake {
     }
 
     void planar(float[][] source, int offset, int frames) {
-        if (source.length != channels) {
+        if (Objects.requireNonNull(source, "source").length != channels) {
             throw new IllegalArgumentException("source has " + source.length + " channels; it must have " + channels);
         }
         float[] row = source[channel];
-        Ranges.interleaved("source[channel]", row.length, offset, frames, 1);
+        Ranges.interleaved("source[channel]", row, offset, frames, 1);
         int next = offset;
         for (int left = frames; left > 0; ) {
             int count = room(left);

@@ -69,71 +69,76 @@ public final class PairLimits {
     }
 
     /**
-     * These limits with another frequency error: {@code percent} of the nominal frequency plus {@code hertz}.
+     * These limits with another frequency error: {@code errorPercent} of the nominal frequency plus {@code errorHz}.
      *
-     * @param percent 0 to 2 percent
-     * @param hertz 0 to 5 Hz
+     * @param errorPercent 0 to 2 percent
+     * @param errorHz 0 to 5 Hz
      * @return the changed copy
      * @throws IllegalArgumentException if a value is outside its range, or both are so small or large that their sum at
      *     1633 Hz is not 8 to 33 Hz
      */
-    public PairLimits withError(double percent, double hertz) {
-        check("percent", percent, 0, 2);
-        check("hertz", hertz, 0, 5);
-        check("the error at 1633 Hz", 16.33 * percent + hertz, 8, 33);
-        return new PairLimits(percent, hertz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
+    public PairLimits withError(double errorPercent, double errorHz) {
+        check("errorPercent", errorPercent, 0, 2);
+        check("errorHz", errorHz, 0, 5);
+        check("the error at 1633 Hz", 16.33 * errorPercent + errorHz, 8, 33);
+        return new PairLimits(
+                errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
     }
 
     /**
      * These limits with another twist: the level of the high tone over that of the low one.
      *
-     * @param lowestDb −12 to 0 dB
-     * @param highestDb 0 to 12 dB
+     * @param lowestTwistDb −12 to 0 dB
+     * @param highestTwistDb 0 to 12 dB
      * @return the changed copy
      * @throws IllegalArgumentException if a value is outside its range
      */
-    public PairLimits withTwist(double lowestDb, double highestDb) {
-        check("lowestDb", lowestDb, -12, 0);
-        check("highestDb", highestDb, 0, 12);
-        return new PairLimits(errorPercent, errorHz, lowestDb, highestDb, floorDbfs, releaseSeconds, leastShare);
+    public PairLimits withTwist(double lowestTwistDb, double highestTwistDb) {
+        check("lowestTwistDb", lowestTwistDb, -12, 0);
+        check("highestTwistDb", highestTwistDb, 0, 12);
+        return new PairLimits(
+                errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
     }
 
     /**
      * These limits with another floor: a tone below it isn't read. Leave a few dB below the weakest tone that must be.
      *
-     * @param dbfs −120 to 0 dBFS, for each tone
+     * @param floorDbfs −120 to 0 dBFS, for each tone
      * @return the changed copy
      * @throws IllegalArgumentException if the value is outside its range
      */
-    public PairLimits withFloor(double dbfs) {
-        check("dbfs", dbfs, -120, 0);
-        return new PairLimits(errorPercent, errorHz, lowestTwistDb, highestTwistDb, dbfs, releaseSeconds, leastShare);
+    public PairLimits withFloor(double floorDbfs) {
+        check("floorDbfs", floorDbfs, -120, 0);
+        return new PairLimits(
+                errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
     }
 
     /**
      * These limits with another release: a gap shorter than it is bridged, a longer one ends the symbol. Set it between
      * the longest interruption and the shortest pause.
      *
-     * @param seconds 0.01 to 0.1 s
+     * @param releaseSeconds 0.01 to 0.1 s
      * @return the changed copy
      * @throws IllegalArgumentException if the value is outside its range
      */
-    public PairLimits withRelease(double seconds) {
-        check("seconds", seconds, 0.01, 0.1);
-        return new PairLimits(errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, seconds, leastShare);
+    public PairLimits withRelease(double releaseSeconds) {
+        check("releaseSeconds", releaseSeconds, 0.01, 0.1);
+        return new PairLimits(
+                errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
     }
 
     /**
      * These limits with another share: how much of the power from 150 to 3000 Hz must be the pair's, on average until it
      * is read. More keeps off more speech; less reads pairs under noise or other tones, down to 6 dB of signal to noise.
      *
-     * @param share 0.8 to 0.95, and 0.91 unless set
+     * @param leastShare 0.8 to 0.95, and 0.91 unless set
      * @return the changed copy
      * @throws IllegalArgumentException if the value is outside its range
      */
-    public PairLimits withShare(double share) {
-        check("share", share, 0.8, 0.95);
-        return new PairLimits(errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, share);
+    public PairLimits withShare(double leastShare) {
+        check("leastShare", leastShare, 0.8, 0.95);
+        return new PairLimits(
+                errorPercent, errorHz, lowestTwistDb, highestTwistDb, floorDbfs, releaseSeconds, leastShare);
     }
 
     private static void check(String name, double value, double least, double most) {
@@ -203,6 +208,13 @@ public final class PairLimits {
      */
     public double leastShare() {
         return leastShare;
+    }
+
+    /** The limits in one line. */
+    @Override
+    public String toString() {
+        return "error " + errorPercent + " % + " + errorHz + " Hz, twist " + lowestTwistDb + " to " + highestTwistDb
+                + " dB, floor " + floorDbfs + " dBFS, release " + releaseSeconds + " s, share " + leastShare;
     }
 
     /** Over 24 ms the average allows a tight gate: two of them stay below the 4.3 % by which 770 and 1477 miss an octave. */

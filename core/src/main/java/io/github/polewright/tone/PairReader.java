@@ -266,35 +266,35 @@ public final class PairReader {
         /**
          * Which channel of how many is read; channel 0 of 1 unless set.
          *
-         * @param index 0 is the first
-         * @param count channels in a frame, at least 1
+         * @param channel 0 is the first
+         * @param channels in a frame, at least 1
          * @return this
          */
-        public Builder channel(int index, int count) {
-            channel = index;
-            channels = count;
+        public Builder channel(int channel, int channels) {
+            this.channel = channel;
+            this.channels = channels;
             return this;
         }
 
         /**
          * What is taken for a tone pair; {@link PairLimits#RECOMMENDED} unless set.
          *
-         * @param wanted the limits
+         * @param limits the limits
          * @return this
          */
-        public Builder limits(PairLimits wanted) {
-            limits = wanted;
+        public Builder limits(PairLimits limits) {
+            this.limits = Objects.requireNonNull(limits, "limits");
             return this;
         }
 
         /**
          * How many events wait at most; 256 unless set.
          *
-         * @param events 1 to 2^20
+         * @param eventCapacity 1 to 2^20
          * @return this
          */
-        public Builder eventCapacity(int events) {
-            eventCapacity = events;
+        public Builder eventCapacity(int eventCapacity) {
+            this.eventCapacity = eventCapacity;
             return this;
         }
 
@@ -307,6 +307,7 @@ public final class PairReader {
          * @throws IllegalArgumentException if a frequency is outside its range
          */
         public Builder dialTone(double... hertz) {
+            Objects.requireNonNull(hertz, "hertz");
             for (double one : hertz) {
                 if (!(one >= 300 && one <= 500)) {
                     throw new IllegalArgumentException("hertz is " + one + "; it must be 300 to 500");

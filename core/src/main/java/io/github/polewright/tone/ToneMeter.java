@@ -1,5 +1,6 @@
 package io.github.polewright.tone;
 
+import io.github.polewright.slab.Ranges;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
@@ -146,6 +147,7 @@ public final class ToneMeter {
      * @throws IndexOutOfBoundsException if there is no such tone
      */
     public double levelDbfs(int tone) {
+        Ranges.index("tone", tone, trackers.length);
         return 10 * Math.log10(Double.longBitsToDouble(levels.getAcquire(tone)));
     }
 
@@ -208,48 +210,48 @@ public final class ToneMeter {
         /**
          * One more tone.
          *
-         * @param wanted its upper edge below half the sample rate
+         * @param tone its upper edge below half the sample rate
          * @return this
          */
-        public Builder tone(Tone wanted) {
-            tones.add(Objects.requireNonNull(wanted, "tone"));
+        public Builder tone(Tone tone) {
+            tones.add(Objects.requireNonNull(tone, "tone"));
             return this;
         }
 
         /**
          * Which channel of how many is read; channel 0 of 1 unless set.
          *
-         * @param index 0 is the first
-         * @param count channels in a frame, at least 1
+         * @param channel 0 is the first
+         * @param channels in a frame, at least 1
          * @return this
          */
-        public Builder channel(int index, int count) {
-            channel = index;
-            channels = count;
+        public Builder channel(int channel, int channels) {
+            this.channel = channel;
+            this.channels = channels;
             return this;
         }
 
         /**
          * The level from which a tone counts as on; −40 dBFS unless set. It is off once 6 dB below its own level.
          *
-         * @param dbfs −200 to 0 dBFS
+         * @param thresholdDbfs −200 to 0 dBFS
          * @return this
          * @throws IllegalArgumentException if the value is outside its range
          */
-        public Builder threshold(double dbfs) {
-            Tone.check("dbfs", dbfs, -200, 0);
-            thresholdDbfs = dbfs;
+        public Builder threshold(double thresholdDbfs) {
+            Tone.check("thresholdDbfs", thresholdDbfs, -200, 0);
+            this.thresholdDbfs = thresholdDbfs;
             return this;
         }
 
         /**
          * How many events wait at most; 256 unless set.
          *
-         * @param events 1 to 2^20
+         * @param eventCapacity 1 to 2^20
          * @return this
          */
-        public Builder eventCapacity(int events) {
-            eventCapacity = events;
+        public Builder eventCapacity(int eventCapacity) {
+            this.eventCapacity = eventCapacity;
             return this;
         }
 

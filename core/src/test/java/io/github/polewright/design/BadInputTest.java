@@ -53,9 +53,11 @@ class BadInputTest {
         add(rows, a -> HumNotch.byQ(a[0], a[1], a[2]), RATE, CENTRE, NARROW_Q);
         add(rows, a -> HumNotch.byQ(a[0], a[1], a[2], a[3]), RATE, CENTRE, NARROW_Q, DEPTH);
         add(rows, a -> HumComb.at(a[0]), new Parameter("fundamentalHz", 50, NOT_POSITIVE));
-        add(rows, a -> HumComb.at(50).widthHz(a[0]), new Parameter("widthHz", 1, NOT_POSITIVE));
+        add(rows, a -> HumComb.at(50).widthHz(a[0]), new Parameter("widthHz", 1, new double[] {
+            NAN, INFINITE, 0, -1, 50, 120
+        }));
         add(rows, a -> HumComb.at(50).depthDb(a[0]), DEPTH);
-        add(rows, a -> HumComb.at(50).lines((int) a[0]), new Parameter("count", 3, new double[] {0, -1}));
+        add(rows, a -> HumComb.at(50).lines((int) a[0]), new Parameter("lines", 3, new double[] {0, -1}));
         add(rows, a -> HumComb.at(50).design(a[0]), RATE);
         add(rows, a -> Cookbook.lowPass(a[0], a[1], a[2]), RATE, CORNER, Q);
         add(rows, a -> Cookbook.highPass(a[0], a[1], a[2]), RATE, CORNER, Q);
@@ -93,7 +95,7 @@ class BadInputTest {
     void refusedByName(int row, String name, double bad, double[] arguments, Consumer<double[]> call) {
         String message = assertThrows(IllegalArgumentException.class, () -> call.accept(arguments))
                 .getMessage();
-        String value = name.equals("count") ? String.valueOf((int) bad) : String.valueOf(bad);
+        String value = name.equals("lines") ? String.valueOf((int) bad) : String.valueOf(bad);
         assertTrue(message.startsWith(name + " is " + value + "; it must be "), message);
     }
 
@@ -106,6 +108,10 @@ class BadInputTest {
         assertRefused("q", () -> HumNotch.byQ(192000, 50, 1e17));
         assertRefused("q", () -> Cookbook.lowPass(48000, 1000, 1e18));
         assertRefused("q", () -> Cookbook.peaking(48000, 1000, 1e18, 6));
+        assertRefused("q", () -> Cookbook.lowShelf(48000, 1000, 1e18, 6));
+        assertRefused("gainDb", () -> Cookbook.peaking(48000, 1000, 1, 3000));
+        assertRefused("gainDb", () -> Cookbook.lowShelf(48000, 1000, 1, 3000));
+        assertRefused("gainDb", () -> Cookbook.highShelf(48000, 1000, 1, -3000));
     }
 
     private static void assertRefused(String name, org.junit.jupiter.api.function.Executable design) {

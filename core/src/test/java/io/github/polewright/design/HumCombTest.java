@@ -88,18 +88,26 @@ class HumCombTest {
         assertEquals(1, comb.lines(1).design(rate).sectionCount());
     }
 
+    /** Notches as wide as their distance are no comb; below that the lowest line always fits above 0. */
     @Test
-    void aLowLineWiderThanItsPlaceIsLeftOut() {
-        Cascade comb = HumComb.at(50).lines(2).widthHz(120).design(RATE);
-        assertEquals(HumNotch.byWidth(RATE, 100, 120), comb.section(0));
-        assertEquals(2, comb.sectionCount());
+    void aWidthOfTheFundamentalOrMoreIsRefused() {
+        String refused = "widthHz is 50.0; it must be above 0 and below 50.0, the fundamental";
+        HumComb comb = HumComb.at(50);
+        assertEquals(
+                refused,
+                assertThrows(IllegalArgumentException.class, () -> comb.widthHz(50))
+                        .getMessage());
+        Cascade wide = comb.widthHz(Math.nextDown(50.0)).lines(2).design(RATE);
+        assertEquals(HumNotch.byWidth(RATE, 50, Math.nextDown(50.0)), wide.section(0));
+        assertEquals(2, wide.sectionCount());
+        assertRefused(HumComb.at(0.4), RATE, "widthHz is 0.5; it must be above 0 and below 0.4");
+        assertEquals(10, HumComb.at(0.4).widthHz(0.1).design(RATE).sectionCount());
     }
 
     @Test
     void refusesWhereNothingFits() {
         assertRefused(HumComb.at(4000), 8000, "fundamentalHz is 4000.0");
         assertRefused(HumComb.at(50).evenLines(), 150, "fundamentalHz is 50.0");
-        assertRefused(HumComb.at(50).widthHz(101).widthGrowing(), 48000, "width of 101.0");
         assertRefused(HumComb.at(50).widthHz(1e-13), 48000, "widthHz is 1.0E-13");
     }
 

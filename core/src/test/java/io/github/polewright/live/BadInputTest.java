@@ -7,6 +7,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import io.github.polewright.Cascade;
 import io.github.polewright.Section;
+import io.github.polewright.retune.Glide;
+import io.github.polewright.retune.Pace;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.FloatBuffer;
@@ -43,8 +45,8 @@ class BadInputTest {
     }
 
     private static void floats(List<Arguments> calls) {
-        add(calls, "null source", NULL, live -> live.process((float[]) null, 0, FLOATS, 0, 1));
-        add(calls, "null destination", NULL, live -> live.process(FLOATS, 0, null, 0, 1));
+        add(calls, "null source", NULL, live -> live.process((float[]) null, 0, FLOATS, 0, 1), "source");
+        add(calls, "null destination", NULL, live -> live.process(FLOATS, 0, null, 0, 1), "destination");
         add(calls, "frames -1", ILLEGAL, live -> live.process(FLOATS, 0, FLOATS, 0, -1), "frames", "-1", "0");
         add(calls, "source short", BOUNDS, live -> live.process(FLOATS, 0, new float[99], 0, 11), "source", "20", "22");
         add(
@@ -77,8 +79,8 @@ class BadInputTest {
     }
 
     private static void doubles(List<Arguments> calls) {
-        add(calls, "null source", NULL, live -> live.process((double[]) null, 0, DOUBLES, 0, 1));
-        add(calls, "null destination", NULL, live -> live.process(DOUBLES, 0, null, 0, 1));
+        add(calls, "null source", NULL, live -> live.process((double[]) null, 0, DOUBLES, 0, 1), "source");
+        add(calls, "null destination", NULL, live -> live.process(DOUBLES, 0, null, 0, 1), "destination");
         add(calls, "frames -1", ILLEGAL, live -> live.process(DOUBLES, 0, DOUBLES, 0, -1), "frames", "-1", "0");
         add(
                 calls,
@@ -101,10 +103,10 @@ class BadInputTest {
         float[][] crossed = {PLANES[1], PLANES[0]};
         float[][] uneven = {new float[10], new float[9]};
         float[][] holed = {new float[10], null};
-        add(calls, "null planes", NULL, live -> live.process((float[][]) null, PLANES, 0, 1));
-        add(calls, "null destination planes", NULL, live -> live.process(PLANES, null, 0, 1));
-        add(calls, "null plane", NULL, live -> live.process(PLANES, holed, 0, 1));
-        add(calls, "null source plane", NULL, live -> live.process(holed, PLANES, 0, 1));
+        add(calls, "null planes", NULL, live -> live.process((float[][]) null, PLANES, 0, 1), "source");
+        add(calls, "null destination planes", NULL, live -> live.process(PLANES, null, 0, 1), "destination");
+        add(calls, "null plane", NULL, live -> live.process(PLANES, holed, 0, 1), "destination plane 1");
+        add(calls, "null source plane", NULL, live -> live.process(holed, PLANES, 0, 1), "source plane 1");
         add(calls, "too few planes", ILLEGAL, live -> live.process(new float[1][10], PLANES, 0, 1), "source", "1", "2");
         add(calls, "too many", ILLEGAL, live -> live.process(PLANES, new float[3][10], 0, 1), "destination", "3", "2");
         add(calls, "frames -1", ILLEGAL, live -> live.process(PLANES, PLANES, 0, -1), "frames", "-1", "0");
@@ -130,8 +132,8 @@ class BadInputTest {
         ByteOrder other =
                 ByteOrder.nativeOrder() == ByteOrder.BIG_ENDIAN ? ByteOrder.LITTLE_ENDIAN : ByteOrder.BIG_ENDIAN;
         FloatBuffer swapped = ByteBuffer.allocateDirect(80).order(other).asFloatBuffer();
-        add(calls, "null buffer", NULL, live -> live.process((FloatBuffer) null, DIRECT, 1));
-        add(calls, "null destination buffer", NULL, live -> live.process(DIRECT, null, 1));
+        add(calls, "null buffer", NULL, live -> live.process((FloatBuffer) null, DIRECT, 1), "source");
+        add(calls, "null destination buffer", NULL, live -> live.process(DIRECT, null, 1), "destination");
         add(calls, "heap source", ILLEGAL, live -> live.process(heap, DIRECT, 1), "source", "heap", "direct");
         add(calls, "heap destination", ILLEGAL, live -> live.process(DIRECT, heap, 1), "destination", "heap", "direct");
         add(calls, "read-only", ILLEGAL, live -> live.process(DIRECT, readOnly, 1), "destination", "read-only");
@@ -147,7 +149,10 @@ class BadInputTest {
         Cascade rate = Cascade.of(44_100, Section.PASS_THROUGH);
         Cascade unstable = Designs.cascade(Section.PASS_THROUGH, Section.of(1, 0, 0, -2.5, 1.5));
         Cascade edge = Designs.cascade(Section.of(1, 0, 0, 0, 1));
-        add(calls, "null target", NULL, live -> live.retune((Cascade) null));
+        add(calls, "null target", NULL, live -> live.retune((Cascade) null), "target");
+        add(calls, "null target, own pace", NULL, live -> live.retune(null, Pace.SINGLE), "target");
+        add(calls, "null pace", NULL, live -> live.retune(Designs.mixed(1, 3), null), "pace");
+        add(calls, "null glide", NULL, live -> live.retune((Glide) null), "glide");
         add(calls, "other rate", ILLEGAL, live -> live.retune(rate), "44100", "48000");
         add(calls, "too long", ILLEGAL, live -> live.retune(Designs.mixed(1, 5)), "5 sections", "4");
         add(calls, "unstable", ILLEGAL, live -> live.retune(unstable), "section 1", "-2.5", "stable", "|a2| < 1");
@@ -168,6 +173,9 @@ class BadInputTest {
             LiveCascade twin = busy(form);
             Throwable thrown = assertThrows(type, () -> call.accept(live));
             assertEquals(type, thrown.getClass());
+            if (type == NULL) {
+                assertEquals(words, List.of(thrown.getMessage()));
+            }
             for (String word : words) {
                 assertTrue(thrown.getMessage().contains(word), "\"" + word + "\" in: " + thrown.getMessage());
             }

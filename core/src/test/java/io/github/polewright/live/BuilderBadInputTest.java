@@ -31,9 +31,14 @@ class BuilderBadInputTest {
 
     @Test
     void refusesNull() {
-        assertThrows(NullPointerException.class, () -> LiveCascade.of(null, 1));
-        assertThrows(NullPointerException.class, () -> LiveCascade.builder(null));
-        assertThrows(NullPointerException.class, () -> builder.form(null));
+        refusesNull("cascade", () -> LiveCascade.of(null, 1));
+        refusesNull("cascade", () -> LiveCascade.builder(null));
+        refusesNull("form", () -> builder.form(null));
+        refusesNull("pace", () -> builder.pace(null));
+    }
+
+    private static void refusesNull(String name, Runnable call) {
+        assertEquals(name, assertThrows(NullPointerException.class, call::run).getMessage());
     }
 
     @Test

@@ -43,6 +43,8 @@ class BytecodeTest {
             "java/nio/ByteOrder.nativeOrder",
             "java/util/Arrays.equals",
             "java/util/Arrays.fill",
+            // Throws where an argument is missing, and else does nothing.
+            "java/util/Objects.requireNonNull",
             "java/util/concurrent/atomic/AtomicLong.setRelease",
             "java/util/concurrent/atomic/AtomicReference.getAcquire",
             "java/util/concurrent/atomic/AtomicReference.setRelease");
@@ -50,8 +52,10 @@ class BytecodeTest {
     /** What a refusal may call besides, for its message. */
     private static final String TEXT = "java/lang/String.valueOf";
 
-    private static final Set<String> REFUSALS =
-            Set.of("java/lang/IllegalArgumentException", "java/lang/IndexOutOfBoundsException");
+    private static final Set<String> REFUSALS = Set.of(
+            "java/lang/IllegalArgumentException",
+            "java/lang/IndexOutOfBoundsException",
+            "java/lang/NullPointerException");
 
     @Test
     void theAudioThreadCreatesLocksAndThrowsNothing() throws IOException {

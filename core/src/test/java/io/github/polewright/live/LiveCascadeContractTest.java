@@ -22,6 +22,18 @@ class LiveCascadeContractTest {
 
     private final Cascade cascade = Designs.mixed(5, 5);
 
+    @Test
+    void printsItsShapeInOneLine() {
+        assertEquals(
+                "DIRECT_FORM_1 at 48000.0 Hz, channels: 1, sections at most: 5",
+                LiveCascade.of(cascade, 1).toString());
+        LiveCascade live = LiveCascade.builder(Designs.mixed(5, 1))
+                .channels(CHANNELS)
+                .form(Form.TRANSPOSED_DIRECT_FORM_2)
+                .build();
+        assertEquals("TRANSPOSED_DIRECT_FORM_2 at 48000.0 Hz, channels: 3, sections at most: 1", live.toString());
+    }
+
     @ParameterizedTest
     @EnumSource(Form.class)
     void floatsInPlaceAtAnOffsetTouchNothingElse(Form form) {

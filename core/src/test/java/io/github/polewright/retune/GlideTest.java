@@ -191,6 +191,16 @@ class GlideTest {
     }
 
     @Test
+    void aPacePrintsInOneLine() {
+        assertEquals(
+                "gentle, 2.0 times the certified length, at least 0.06 s and 0.025 s an octave",
+                Pace.SINGLE.toString());
+        assertEquals(
+                "even, 1.0 times the certified length, at least 3.0 s and 0.0 s an octave",
+                Pace.TURNING.atLeastSeconds(3).toString());
+    }
+
+    @Test
     void whatCannotBeCertifiedIsRefused() {
         Cascade notch = cascade(Sections.notch(50, 1));
         assertThrows(

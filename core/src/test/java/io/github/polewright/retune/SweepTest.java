@@ -94,6 +94,10 @@ class SweepTest {
         Section high = Sections.notch(1000, 5);
         Glide glide = Glide.sweeping(cascade(low), cascade(high), Pace.SINGLE);
         assertEquals(Certificate.Rule.EXCHANGE, glide.certificate(0).rule());
+        assertEquals(
+                "Section 0: it fades, and once it rings no more another is born in its place, in " + glide.totalFrames()
+                        + " frames; ringing grows at most 1.00-fold (0.0 dB).",
+                glide.certificate(0).toString());
         assertEquals(0, glide.certificate(0).distance());
         boolean swapped = false;
         for (int knot = 0; knot <= glide.segmentCount(); knot++) {

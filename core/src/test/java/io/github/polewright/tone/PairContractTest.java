@@ -248,14 +248,14 @@ final class PairContractTest {
         refused("channels", () -> PairReader.builder(8000).channel(0, 0).build());
         refused("eventCapacity", () -> PairReader.builder(8000).eventCapacity(0).build());
         refused("hertz", () -> PairReader.builder(8000).dialTone(350, 600));
-        refused("percent", () -> PairLimits.RECOMMENDED.withError(2.5, 0));
-        refused("hertz", () -> PairLimits.RECOMMENDED.withError(1, Double.NaN));
+        refused("errorPercent", () -> PairLimits.RECOMMENDED.withError(2.5, 0));
+        refused("errorHz", () -> PairLimits.RECOMMENDED.withError(1, Double.NaN));
         refused("1633", () -> PairLimits.RECOMMENDED.withError(0, 0));
-        refused("lowestDb", () -> PairLimits.RECOMMENDED.withTwist(1, 4));
-        refused("highestDb", () -> PairLimits.RECOMMENDED.withTwist(-8, 13));
-        refused("dbfs", () -> PairLimits.RECOMMENDED.withFloor(1));
-        refused("share", () -> PairLimits.RECOMMENDED.withShare(0.96));
-        refused("seconds", () -> PairLimits.RECOMMENDED.withRelease(0));
+        refused("lowestTwistDb", () -> PairLimits.RECOMMENDED.withTwist(1, 4));
+        refused("highestTwistDb", () -> PairLimits.RECOMMENDED.withTwist(-8, 13));
+        refused("floorDbfs", () -> PairLimits.RECOMMENDED.withFloor(1));
+        refused("leastShare", () -> PairLimits.RECOMMENDED.withShare(0.96));
+        refused("releaseSeconds", () -> PairLimits.RECOMMENDED.withRelease(0));
         PairReader stereo = PairReader.builder(8000).channel(1, 2).build();
         float[] ten = {9, 9, 9, 9, 9, 9, 9, 9, 9, 9};
         assertThrows(IllegalArgumentException.class, () -> stereo.process(ten, 0, -1));
@@ -265,6 +265,22 @@ final class PairContractTest {
         assertThrows(IllegalArgumentException.class, () -> stereo.process(new float[][] {ten}, 0, 1));
         assertThrows(IndexOutOfBoundsException.class, () -> stereo.process(new float[][] {ten, ten}, 5, 6));
         assertTrue(stereo.isSilent());
+    }
+
+    @Test
+    void limitsPrintInOneLine() {
+        assertEquals(
+                "error 1.5 % + 2.0 Hz, twist -8.0 to 4.0 dB, floor -36.0 dBFS, release 0.02 s, share 0.91",
+                PairLimits.RECOMMENDED.toString());
+        assertEquals(
+                "error 1.0 % + 3.0 Hz, twist -5.0 to 6.0 dB, floor -40.0 dBFS, release 0.03 s, share 0.9",
+                PairLimits.RECOMMENDED
+                        .withError(1, 3)
+                        .withTwist(-5, 6)
+                        .withFloor(-40)
+                        .withRelease(0.03)
+                        .withShare(0.9)
+                        .toString());
     }
 
     private static void refused(String name, Runnable work) {

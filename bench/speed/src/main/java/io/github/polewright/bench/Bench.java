@@ -39,7 +39,7 @@ import picocli.CommandLine.IVersionProvider;
         },
         footer = {
             "",
-            "  jmh         All that follows goes to the benchmark runner, org.openjdk.jmh.Main, as it stands;",
+            "  jmh         All that follows goes to the benchmark runner (JMH) as it stands;",
             "                try jmh -l and jmh -h.",
             "",
             "Exit status: 0 met, 1 failure, 2 bad option, 3 measured and not met."

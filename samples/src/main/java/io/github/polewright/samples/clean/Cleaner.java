@@ -31,8 +31,9 @@ public final class Cleaner {
         double seconds = (System.nanoTime() - start) / 1e9;
         Surveyor.Measured after = Surveyor.measure(Recording.open(out), survey);
         boolean followed = filter instanceof FollowingStream;
+        FollowedHum removed = filter instanceof FollowingStream stream ? stream.removed() : FollowedHum.NONE;
         long nonFinite = filter.nonFiniteSamples();
-        return new Cleaning(survey, followed, after.lines(), after.dcOffset(), clipped, nonFinite, seconds);
+        return new Cleaning(survey, followed, removed, after.lines(), after.dcOffset(), clipped, nonFinite, seconds);
     }
 
     /** Hum that the survey found and the remover does not take for mains is left to the survey's notches. */

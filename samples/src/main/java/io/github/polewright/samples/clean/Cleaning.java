@@ -9,6 +9,7 @@ import java.util.List;
  *
  * @param before what the survey of the recording found
  * @param followed whether a remover followed the mains; if not, the survey's notches were kept
+ * @param removed what that remover took out, whatever the survey found
  * @param linesAfter the same lines, measured in the cleaned file
  * @param dcAfter the mean of each channel of the cleaned file
  * @param clippedSamples samples that left the range of the file's format
@@ -18,6 +19,7 @@ import java.util.List;
 public record Cleaning(
         Survey before,
         boolean followed,
+        FollowedHum removed,
         List<HumLine> linesAfter,
         List<Double> dcAfter,
         long clippedSamples,
@@ -27,6 +29,11 @@ public record Cleaning(
     public Cleaning {
         linesAfter = List.copyOf(linesAfter);
         dcAfter = List.copyOf(dcAfter);
+    }
+
+    /** Whether hum was taken out by either. */
+    public boolean humRemoved() {
+        return before.humFound() || removed.lines() > 0;
     }
 
     /** How far a line was turned down, in decibels. */

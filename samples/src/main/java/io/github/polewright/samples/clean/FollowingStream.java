@@ -5,6 +5,7 @@ import io.github.polewright.Section;
 import io.github.polewright.design.DcNotch;
 import io.github.polewright.live.LiveCascade;
 import io.github.polewright.mains.HumRemover;
+import io.github.polewright.mains.MainsReading;
 import io.github.polewright.mains.MainsState;
 import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.survey.OpeningHum;
@@ -29,6 +30,8 @@ final class FollowingStream implements FrameFilter {
     private final LiveCascade dc;
     private final double sampleRateHz;
     private final int channels;
+    private long framesDone;
+    private FollowedHum removed = FollowedHum.NONE;
 
     FollowingStream(Recording recording, CleanWish wish) {
         sampleRateHz = recording.sampleRateHz();
@@ -59,6 +62,8 @@ final class FollowingStream implements FrameFilter {
             opening.extend(frame, count, block);
             process(block, count);
         }
+        framesDone = 0;
+        removed = FollowedHum.NONE;
     }
 
     /** Whether mains are followed now. */
@@ -71,6 +76,37 @@ final class FollowingStream implements FrameFilter {
     public void process(double[] block, int frames) {
         remover.process(block, 0, block, 0, frames);
         dc.process(block, 0, block, 0, frames);
+        note(remover.reading(), frames);
+        framesDone += frames;
+    }
+
+    private void note(MainsReading reading, int frames) {
+        int lines = reading.state() == MainsState.FOLLOWING ? linesThere(reading) : 0;
+        if (lines > 0) {
+            removed = new FollowedHum(
+                    Math.max(lines, removed.lines()),
+                    reading.frequencyHz(),
+                    removed.lines() == 0 ? framesDone / sampleRateHz : removed.fromSeconds(),
+                    removed.seconds() + frames / sampleRateHz);
+        }
+    }
+
+    private static int linesThere(MainsReading reading) {
+        int there = 0;
+        for (int harmonic = 1; harmonic <= reading.lines(); harmonic++) {
+            for (int channel = 0; channel < reading.channels(); channel++) {
+                if (reading.levelDb(harmonic, channel) > Double.NEGATIVE_INFINITY) {
+                    there++;
+                    break;
+                }
+            }
+        }
+        return there;
+    }
+
+    /** What was taken out of the recording so far. */
+    FollowedHum removed() {
+        return removed;
     }
 
     @Override

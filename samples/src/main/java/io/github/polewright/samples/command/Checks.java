@@ -19,6 +19,14 @@ final class Checks {
         }
     }
 
+    /** The same of a whole number, which is printed as one. */
+    static void range(CommandSpec spec, String name, int value, int least, int most) {
+        if (value < least || value > most) {
+            throw new ParameterException(
+                    spec.commandLine(), name + " is " + value + "; it must be " + least + " to " + most);
+        }
+    }
+
     static void differs(CommandSpec spec, String name, Path output, Path input) {
         if (WholeFile.same(output, input)) {
             throw new ParameterException(

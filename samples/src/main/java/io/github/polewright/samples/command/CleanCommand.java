@@ -67,7 +67,8 @@ final class CleanCommand implements Runnable {
     @Override
     public void run() {
         hum.check(spec);
-        Checks.range(spec, "--width", widthHz, 0.05, 10);
+        // Notches half as wide as their distance are no longer notches.
+        Checks.range(spec, "--width", widthHz, 0.05, hum.mainsHz() > 0 ? Math.min(10, hum.mainsHz() / 2) : 10);
         Checks.differs(spec, "OUT.wav", out, in);
         CleanWish wish = new CleanWish(hum.mainsHz(), hum.harmonics(), widthHz, !noDc, fixed);
         Recording recording = Recording.open(in);

@@ -13,6 +13,7 @@ import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
@@ -20,7 +21,8 @@ import picocli.CommandLine.Spec;
         name = "tones",
         description = {
             "Reads the tone pairs of push-button dialling in a WAV file, or listens for tones that are named.",
-            "Prints a line for each: start_s,end_s,symbol. A named tone's symbol is its frequency.",
+            "Prints a line for each: start_s,end_s,symbol. A named tone's symbol is its frequency. Where nothing is"
+                    + " found, a line on standard error says so.",
             "Speech and music hold such tones now and then, and a line can swallow one: let nothing that protects"
                     + " people or property hang on it alone."
         },
@@ -60,6 +62,10 @@ final class TonesCommand implements Runnable {
     @Override
     public void run() {
         Checks.range(spec, "--width", widthHz, 0.5, 1000);
+        if (watchHz.isEmpty() && spec.commandLine().getParseResult().hasMatchedOption("--width")) {
+            throw new ParameterException(
+                    spec.commandLine(), "--width is of use with --watch only, which names the tones to listen for");
+        }
         if (json != null) {
             Checks.differs(spec, "--json", json, in);
             Checks.writable(json);
@@ -82,6 +88,9 @@ final class TonesCommand implements Runnable {
             WholeFile.writeText(json, ToneReport.pairJson(recording, channel, pairs));
         }
         ToneReport.pairLines(pairs).forEach(spec.commandLine().getOut()::println);
+        if (pairs.isEmpty()) {
+            tellNone("tone pairs");
+        }
     }
 
     private void watch(Recording recording, Tones tones) {
@@ -95,5 +104,13 @@ final class TonesCommand implements Runnable {
             WholeFile.writeText(json, ToneReport.toneJson(recording, channel, heard));
         }
         ToneReport.toneLines(heard).forEach(spec.commandLine().getOut()::println);
+        if (heard.isEmpty()) {
+            tellNone("tones");
+        }
+    }
+
+    /** On standard error, so that what reads the comma-separated lines never meets a sentence. */
+    private void tellNone(String what) {
+        spec.commandLine().getErr().println("no " + what + " found in channel " + channel + " of " + in);
     }
 }

@@ -88,6 +88,7 @@ final class Charts {
         double[] seconds = track.stream().mapToDouble(MainsMoment::seconds).toArray();
         double[] hertz = track.stream().mapToDouble(MainsMoment::frequencyHz).toArray();
         style(chart.addSeries("mains", seconds, hertz), AFTER);
+        chart.getStyler().setXAxisMin(0.0);
         chart.getStyler().setYAxisDecimalPattern("0.000");
         chart.getStyler().setLegendVisible(false);
         return chart;
@@ -104,6 +105,8 @@ final class Charts {
         chart.getStyler().setChartBackgroundColor(Color.WHITE);
         chart.getStyler().setLegendPosition(Styler.LegendPosition.InsideNE);
         chart.getStyler().setDecimalPattern("#");
+        // No margin about what is drawn: it would show frequencies and times below 0.
+        chart.getStyler().setPlotContentSize(1);
         return chart;
     }
 

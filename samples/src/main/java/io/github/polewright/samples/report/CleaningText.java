@@ -1,6 +1,7 @@
 package io.github.polewright.samples.report;
 
 import io.github.polewright.samples.clean.Cleaning;
+import io.github.polewright.samples.clean.FollowedHum;
 import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.survey.HumLine;
 import io.github.polewright.samples.survey.Survey;
@@ -19,12 +20,7 @@ public final class CleaningText {
     public static List<String> of(Recording in, Path out, Cleaning cleaning, boolean dcWanted) {
         Survey before = cleaning.before();
         List<String> lines = new ArrayList<>(SurveyText.head(in, before));
-        if (!before.humFound()) {
-            lines.add(dcWanted ? "           so only DC is removed" : "           so nothing is removed");
-        } else {
-            lines.add("removal    "
-                    + (cleaning.followed() ? "follows the mains" : "by notches where the survey has them"));
-        }
+        lines.add(removal(cleaning, dcWanted));
         lines.add("");
         if (dcWanted) {
             for (int c = 0; c < cleaning.dcAfter().size(); c++) {
@@ -40,11 +36,29 @@ public final class CleaningText {
         lines.add("clipped    " + cleaning.clippedSamples() + " samples");
         lines.add("not finite " + cleaning.nonFiniteSamples() + " samples");
         lines.add("");
-        if (before.humFound()) {
+        if (cleaning.humRemoved()) {
             lines.add("Caution: " + SurveyText.WIRING);
+            lines.add("Caution: " + LOUDNESS);
         }
-        lines.add("Caution: " + LOUDNESS);
         return lines;
+    }
+
+    private static String removal(Cleaning cleaning, boolean dcWanted) {
+        if (cleaning.before().humFound()) {
+            return "removal    " + (cleaning.followed() ? "follows the mains" : "by notches where the survey has them");
+        }
+        FollowedHum removed = cleaning.removed();
+        if (removed.lines() > 0) {
+            return Numbers.format(
+                    "removal    the survey missed it, but the remover that follows the mains met hum from %.1f s on: up to"
+                            + " %d %s of %.3f Hz taken out, for %.1f s in all",
+                    removed.fromSeconds(),
+                    removed.lines(),
+                    removed.lines() == 1 ? "line" : "lines",
+                    removed.frequencyHz(),
+                    removed.seconds());
+        }
+        return dcWanted ? "           so only DC is removed" : "           so nothing is removed";
     }
 
     private static List<String> table(Cleaning cleaning) {

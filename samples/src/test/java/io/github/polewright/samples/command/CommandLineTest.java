@@ -12,16 +12,14 @@ import io.github.polewright.samples.Wav;
 import io.github.polewright.samples.files.Recording;
 import java.awt.image.BufferedImage;
 import java.io.IOException;
-import java.io.PrintWriter;
-import java.io.StringWriter;
 import java.nio.ByteBuffer;
-import java.nio.ByteOrder;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import javax.imageio.ImageIO;
 import org.junit.jupiter.api.BeforeEach;
@@ -30,7 +28,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
-final class CommandLineTest {
+final class CommandLineTest extends CommandRun {
 
     private static final double[] SIZES = {0.03, 0.015, 0.02, 0.006, 0.012, 0.003};
 
@@ -39,8 +37,6 @@ final class CommandLineTest {
 
     private Path in;
     private Path out;
-    private String printed = "";
-    private String complained = "";
 
     @BeforeEach
     void makeRecording() {
@@ -56,28 +52,6 @@ final class CommandLineTest {
                         Sounds.noise(rate, seconds, 0.002, 2),
                         Sounds.sine(rate, seconds, 440, 0.1)),
                 0.02);
-    }
-
-    private int run(Object... args) {
-        StringWriter print = new StringWriter();
-        StringWriter complaints = new StringWriter();
-        String[] words = Stream.of(args).map(Object::toString).toArray(String[]::new);
-        int status = Main.run(new PrintWriter(print, true), new PrintWriter(complaints, true), words);
-        printed = print.toString();
-        complained = complaints.toString();
-        return status;
-    }
-
-    /** One line on standard error, nothing on the other, and the folder as it was. */
-    private void refused(int status, String words, Object... args) throws IOException {
-        List<String> before = listing();
-        byte[] input = Files.readAllBytes(in);
-        assertEquals(status, run(args), complained);
-        assertEquals("", printed);
-        assertEquals(1, complained.lines().count(), complained);
-        assertTrue(complained.contains(words), complained);
-        assertEquals(before, listing());
-        assertArrayEquals(input, Files.readAllBytes(in));
     }
 
     private List<String> listing() throws IOException {
@@ -177,10 +151,44 @@ final class CommandLineTest {
         assertEquals(0, run("clean", in, out), complained);
         assertTrue(printed.contains("no hum found"), printed);
         assertTrue(printed.contains("only DC is removed"), printed);
+        assertFalse(printed.contains("Caution"), printed);
         double[] rest = Sounds.sum(Wav.read(out), Sounds.scaled(notes, -1));
         // A notch of 1 Hz at DC turns a tone of 55 Hz by 1 degree, and higher ones less.
         assertEquals(0, Sounds.rms(rest) / Sounds.rms(notes), 0.02);
         assertEquals(0, Arrays.stream(Wav.read(out)).average().orElseThrow(), 1e-4);
+    }
+
+    /** Hum that fills a sixth of the recording: no hum of the recording to the survey, but the follower meets it. */
+    @Test
+    void humThatTheSurveyMissesIsToldWhereTheFollowerTakesItOut() {
+        double[] sound = Sounds.noise(8000, 90, 0.002, 6);
+        double[] hum = Sounds.hum(8000, 15, 50.04, SIZES, 1);
+        for (int n = 0; n < hum.length; n++) {
+            sound[60 * 8000 + n] += hum[n];
+        }
+        Wav.write(in, 8000, 1, 24, false, sound);
+        assertEquals(0, run("clean", in, out), complained);
+        assertTrue(printed.contains("no hum found"), printed);
+        assertFalse(printed.contains("removed"), printed);
+        Matcher told = Pattern.compile(
+                        "met hum from ([\\d.]+) s on: up to (\\d) lines of 50.04\\d Hz taken out, for ([\\d.]+) s")
+                .matcher(printed);
+        assertTrue(told.find(), printed);
+        double from = Double.parseDouble(told.group(1));
+        double seconds = Double.parseDouble(told.group(3));
+        assertTrue(from > 60 && from + seconds > 75 && from + seconds < 77, printed);
+        assertTrue(printed.contains("low volume"), printed);
+        // What is told is what was done: the hum is gone from a second after that on, and was there before it.
+        assertEquals(0.002, Sounds.rms(part(Wav.read(out), from + 1, 75)), 0.0004);
+        assertEquals(Sounds.rms(hum), Sounds.rms(part(Wav.read(out), 60, from - 0.5)), 0.001);
+
+        assertEquals(0, run("clean", in, out, "--fixed"), complained);
+        assertTrue(printed.contains("only DC is removed"), printed);
+        assertFalse(printed.contains("Caution"), printed);
+    }
+
+    private static double[] part(double[] sound, double fromSeconds, double toSeconds) {
+        return Arrays.copyOfRange(sound, (int) (fromSeconds * 8000), (int) (toSeconds * 8000));
     }
 
     @Test
@@ -322,96 +330,6 @@ final class CommandLineTest {
         System.out.printf("demo: what is not the scene falls by %.1f dB%n", gainDb);
         // The notches take a little of the scene, too, which counts here as if it were hum.
         assertTrue(gainDb > 15, "gain of " + gainDb + " dB");
-    }
-
-    @Test
-    void wrongUsageIsRefused() throws IOException {
-        refused(Main.USAGE, "a command is missing");
-        refused(Main.USAGE, "washing", "washing", in, out);
-        refused(Main.USAGE, "--loud", "clean", in, out, "--loud");
-        refused(Main.USAGE, "--loud", "survey", in, "--loud");
-        refused(Main.USAGE, "OUT.wav", "clean", in);
-        refused(Main.USAGE, "IN.wav", "survey");
-        refused(Main.USAGE, "--width", "clean", in, out, "--width", "0");
-        refused(Main.USAGE, "--width", "clean", in, out, "--width", "NaN");
-        refused(Main.USAGE, "--width", "clean", in, out, "--width", "wide");
-        refused(Main.USAGE, "--mains", "clean", in, out, "--mains", "-50");
-        refused(Main.USAGE, "--harmonics", "survey", in, "--harmonics", "0");
-    }
-
-    @Test
-    void theInputIsNeverTheOutput() throws IOException {
-        refused(Main.USAGE, "never written", "clean", in, in);
-        refused(
-                Main.USAGE,
-                "never written",
-                "clean",
-                in,
-                folder.resolve("x").resolve("..").resolve("in.wav"));
-        refused(Main.USAGE, "never written", "survey", in, "--json", in);
-        Path link = Files.createSymbolicLink(folder.resolve("link.wav"), in);
-        refused(Main.USAGE, "never written", "clean", in, link);
-        refused(Main.USAGE, "never written", "clean", link, in);
-        Path hard = Files.createLink(folder.resolve("hard.wav"), in);
-        refused(Main.USAGE, "never written", "clean", in, hard);
-        Path relative = Path.of("").toAbsolutePath().relativize(in.toRealPath());
-        refused(Main.USAGE, "never written", "clean", in, relative);
-    }
-
-    @Test
-    void filesThatCannotBeReadAreRefused() throws IOException {
-        refused(Main.FAILED, "does not exist", "survey", folder.resolve("none.wav"));
-        refused(Main.FAILED, "does not exist", "clean", folder.resolve("none.wav"), out);
-        refused(Main.FAILED, "is not a file", "survey", folder);
-        byte[] whole = Files.readAllBytes(in);
-        Path bad = folder.resolve("bad.wav");
-        for (int length : new int[] {0, 10, 30, 44, 45, whole.length / 2, whole.length - 1}) {
-            Files.write(bad, Arrays.copyOf(whole, length));
-            String words = length == 0 ? "is empty" : length < 44 ? "not a whole WAV file" : "truncated";
-            refused(Main.FAILED, words, "survey", bad);
-            refused(Main.FAILED, words, "clean", bad, out, "--report", folder.resolve("report"));
-        }
-        byte[] noSamples = Arrays.copyOf(whole, 44);
-        ByteBuffer.wrap(noSamples).order(ByteOrder.LITTLE_ENDIAN).putInt(40, 0).putInt(4, 36);
-        Files.write(bad, noSamples);
-        refused(Main.FAILED, "holds no samples", "clean", bad, out);
-        Files.writeString(bad, "This is not a sound at all, but a text of some length.", StandardCharsets.US_ASCII);
-        refused(Main.FAILED, "not a whole WAV file of uncompressed", "clean", bad, out);
-    }
-
-    @Test
-    void compressedFilesAreRefused() throws IOException {
-        byte[] whole = Files.readAllBytes(in);
-        Path bad = folder.resolve("bad.wav");
-        // A-law, mu-law, two kinds of ADPCM and MPEG layer 3, by the registered format tags.
-        for (short tag : new short[] {6, 7, 2, 17, 0x55}) {
-            byte[] other = whole.clone();
-            ByteBuffer header = ByteBuffer.wrap(other).order(ByteOrder.LITTLE_ENDIAN);
-            header.putShort(20, tag).putShort(32, (short) 1).putShort(34, (short) 8);
-            Files.write(bad, other);
-            refused(Main.FAILED, "compressed", "clean", bad, out);
-            refused(Main.FAILED, "compressed", "survey", bad);
-        }
-    }
-
-    @Test
-    void placesThatCannotBeWrittenAreRefused() throws IOException {
-        refused(
-                Main.FAILED,
-                "does not exist",
-                "clean",
-                in,
-                folder.resolve("none").resolve("out.wav"));
-        refused(Main.FAILED, "is a folder", "clean", in, folder);
-        refused(
-                Main.FAILED,
-                "does not exist",
-                "survey",
-                in,
-                "--json",
-                folder.resolve("none").resolve("a.json"));
-        refused(Main.FAILED, "cannot make the folder", "clean", in, out, "--report", in.resolve("report"));
-        refused(Main.FAILED, "cannot make the folder", "demo", "--folder", in);
     }
 
     @Test

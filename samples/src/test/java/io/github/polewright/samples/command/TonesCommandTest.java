@@ -11,8 +11,6 @@ import com.google.gson.JsonParser;
 import io.github.polewright.samples.Sounds;
 import io.github.polewright.samples.Wav;
 import java.io.IOException;
-import java.io.PrintWriter;
-import java.io.StringWriter;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -23,23 +21,10 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
 /** Frequencies of the symbols from ITU-T Q.23. */
-final class TonesCommandTest {
+final class TonesCommandTest extends CommandRun {
 
     @TempDir
     private Path folder;
-
-    private String printed = "";
-    private String complained = "";
-
-    private int run(Object... args) {
-        StringWriter print = new StringWriter();
-        StringWriter complaints = new StringWriter();
-        String[] words = Stream.of(args).map(Object::toString).toArray(String[]::new);
-        int status = Main.run(new PrintWriter(print, true), new PrintWriter(complaints, true), words);
-        printed = print.toString();
-        complained = complaints.toString();
-        return status;
-    }
 
     /** Adds a sine to part of a sound. */
     private static void sound(double[] sound, double rate, double from, double to, double hertz, double levelDb) {
@@ -145,6 +130,14 @@ final class TonesCommandTest {
         assertTrue(printed.lines().toList().get(1).endsWith(",1500"), printed);
         assertEquals(0, run("tones", in, "--watch", "437.5"), complained);
         assertEquals(List.of("start_s,end_s,symbol"), printed.lines().toList());
+        assertEquals(
+                List.of("no tones found in channel 1 of " + in),
+                complained.lines().toList());
+        assertEquals(0, run("tones", in), complained);
+        assertEquals(List.of("start_s,end_s,symbol"), printed.lines().toList());
+        assertEquals(
+                List.of("no tone pairs found in channel 1 of " + in),
+                complained.lines().toList());
     }
 
     private static void expectNear(String line, double start, double end, String symbol) {
@@ -158,12 +151,13 @@ final class TonesCommandTest {
     void wrongUsageIsRefusedInOneLine() throws IOException {
         Path in = Wav.write(folder.resolve("in.wav"), 8000, 1, 16, false, dialled(8000));
         refused(Main.USAGE, "IN.wav", "tones");
-        refused(Main.USAGE, "--channel is 2", "tones", in, "--channel", "2");
-        refused(Main.USAGE, "--channel is 0", "tones", in, "--channel", "0");
+        refused(Main.USAGE, "--channel is 2; it must be 1 to 1 ", "tones", in, "--channel", "2");
+        refused(Main.USAGE, "--channel is 0; it must be 1 to 1 ", "tones", in, "--channel", "0");
         refused(Main.USAGE, "--watch is 3995", "tones", in, "--watch", "1000,3995");
         refused(Main.USAGE, "--watch is 5", "tones", in, "--watch", "5");
         refused(Main.USAGE, "--watch", "tones", in, "--watch", "low");
         refused(Main.USAGE, "--width is 0", "tones", in, "--watch", "1000", "--width", "0");
+        refused(Main.USAGE, "--width is of use with --watch only", "tones", in, "--width", "5");
         refused(Main.USAGE, "never written", "tones", in, "--json", in);
         refused(Main.FAILED, "does not exist", "tones", folder.resolve("none.wav"));
         refused(

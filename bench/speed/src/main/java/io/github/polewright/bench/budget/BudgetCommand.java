@@ -49,24 +49,31 @@ public final class BudgetCommand implements Callable<Integer> {
             description = "Share of the period the chain may take (${DEFAULT-VALUE}).")
     private double sharePercent;
 
-    @Option(names = "--chart", paramLabel = "FILE.png", description = "Draw the distribution against the period.")
+    @Option(
+            names = "--chart",
+            paramLabel = "FILE.png",
+            description = "Draw how the times of the blocks are distributed, beside the period.")
     private @Nullable Path chart;
 
-    @Option(names = "--forks", defaultValue = "1", paramLabel = "N", description = "JVMs (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--forks",
+            defaultValue = "1",
+            paramLabel = "N",
+            description = "JVMs to measure in (${DEFAULT-VALUE}).")
     private int forks;
 
     @Option(
             names = "--warm-seconds",
             defaultValue = "3",
             paramLabel = "N",
-            description = "Seconds of warm-up a JVM (${DEFAULT-VALUE}).")
+            description = "Seconds of warm-up in each JVM (${DEFAULT-VALUE}).")
     private int warmSeconds;
 
     @Option(
             names = "--seconds",
             defaultValue = "5",
             paramLabel = "N",
-            description = "Seconds measured a JVM (${DEFAULT-VALUE}).")
+            description = "Seconds measured in each JVM (${DEFAULT-VALUE}).")
     private int seconds;
 
     /** For the option parser. */

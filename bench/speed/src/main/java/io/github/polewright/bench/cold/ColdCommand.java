@@ -42,17 +42,25 @@ public final class ColdCommand implements Callable<Integer> {
     @Mixin
     private Output output = new Output();
 
-    @Option(names = "--blocks", defaultValue = "2000", paramLabel = "N", description = "Blocks (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--blocks",
+            defaultValue = "2000",
+            paramLabel = "N",
+            description = "Blocks in each JVM (${DEFAULT-VALUE}).")
     private int blocks;
 
-    @Option(names = "--forks", defaultValue = "3", paramLabel = "N", description = "JVMs of a kind (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--forks",
+            defaultValue = "3",
+            paramLabel = "N",
+            description = "JVMs with the warm-up, and as many without (${DEFAULT-VALUE}).")
     private int forks;
 
     @Option(
             names = "--warm-millis",
             defaultValue = "5000",
             paramLabel = "N",
-            description = "What the warm-up may take at most (${DEFAULT-VALUE}).")
+            description = "Milliseconds the warm-up may take at most (${DEFAULT-VALUE}).")
     private long warmMillis;
 
     @Option(

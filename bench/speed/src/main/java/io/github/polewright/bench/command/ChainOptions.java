@@ -16,7 +16,7 @@ public final class ChainOptions {
             names = "--rate-hz",
             defaultValue = "48000",
             paramLabel = "HZ",
-            description = "Sample rate (default: ${DEFAULT-VALUE}).")
+            description = "Sample rate (${DEFAULT-VALUE}).")
     private double sampleRateHz;
 
     @Option(names = "--channels", defaultValue = "2", paramLabel = "N", description = "Channels (${DEFAULT-VALUE}).")
@@ -40,7 +40,7 @@ public final class ChainOptions {
             names = "--form",
             defaultValue = "DIRECT_FORM_1",
             paramLabel = "FORM",
-            description = "${COMPLETION-CANDIDATES} (${DEFAULT-VALUE}).")
+            description = "How a section is computed: ${COMPLETION-CANDIDATES} (${DEFAULT-VALUE}).")
     private Form form = Form.DIRECT_FORM_1;
 
     /** For the option parser. */

@@ -15,7 +15,10 @@ import picocli.CommandLine.Option;
 /** Where a command's results go: the table to standard output, the report to a file if one is named. */
 public final class Output {
 
-    @Option(names = "--json", paramLabel = "FILE", description = "Write the report there as well, for compare.")
+    @Option(
+            names = "--json",
+            paramLabel = "FILE",
+            description = "Also write the report to this file, as compare reads it.")
     private @Nullable Path json;
 
     /** For the option parser. */

@@ -38,7 +38,7 @@ public final class CompareCommand implements Callable<Integer> {
     @Parameters(index = "1", paramLabel = "NEW.json", description = "The report to divide.")
     private @Nullable Path after;
 
-    @Option(names = "--most", paramLabel = "RATIO", description = "The highest ratio of times to put up with.")
+    @Option(names = "--most", paramLabel = "RATIO", description = "The highest ratio of times that is accepted.")
     private double most = Double.POSITIVE_INFINITY;
 
     /** For the option parser. */

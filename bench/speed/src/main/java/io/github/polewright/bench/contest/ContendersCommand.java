@@ -47,14 +47,14 @@ public final class ContendersCommand implements Callable<Integer> {
             names = "--warm-millis",
             defaultValue = "1500",
             paramLabel = "N",
-            description = "Warm-up of a contender (${DEFAULT-VALUE}).")
+            description = "Milliseconds of warm-up for each contender (${DEFAULT-VALUE}).")
     private long warmMillis;
 
     @Option(
             names = "--rounds",
             defaultValue = "41",
             paramLabel = "N",
-            description = "Turns of each (${DEFAULT-VALUE}).")
+            description = "How many turns each contender takes (${DEFAULT-VALUE}).")
     private int rounds;
 
     /** For the option parser. */

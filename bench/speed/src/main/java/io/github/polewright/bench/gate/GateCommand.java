@@ -26,7 +26,7 @@ import picocli.CommandLine.Spec;
         description =
                 "What a build may fail on: allocation, the cost of decays and subnormal input over noise, a budget"
                         + " ten times the usual cost, and cost that grows as frames and sections do. Takes about a minute."
-                        + " Exit status 0 or 3.")
+                        + " Exit status 0 if all is met, 3 if not.")
 public final class GateCommand implements Callable<Integer> {
 
     private static final Duration WARM_UP = Duration.ofMillis(1500);

@@ -64,7 +64,7 @@ public final class HumCommand implements Callable<Integer> {
             names = "--channels",
             defaultValue = "2",
             paramLabel = "N",
-            description = "Samples a frame, 1 to 64 (${DEFAULT-VALUE}).")
+            description = "Channels, 1 to 64 (${DEFAULT-VALUE}).")
     private int channels;
 
     @Option(
@@ -85,14 +85,14 @@ public final class HumCommand implements Callable<Integer> {
             names = "--ratio",
             defaultValue = "3",
             paramLabel = "R",
-            description = "How many means the dearest block may take (${DEFAULT-VALUE}).")
+            description = "How many times the mean the dearest block may take (${DEFAULT-VALUE}).")
     private double mostRatio;
 
     @Option(
             names = "--repeats",
             defaultValue = "60",
             paramLabel = "N",
-            description = "Times the passage is played; a block counts with its least (${DEFAULT-VALUE}).")
+            description = "How often the passage is played; of each block the shortest time counts (${DEFAULT-VALUE}).")
     private int repeats;
 
     /** For the option parser. */

@@ -35,7 +35,11 @@ public final class SoakCommand implements Callable<Integer> {
     @Mixin
     private Output output = new Output();
 
-    @Option(names = "--seconds", defaultValue = "60", paramLabel = "N", description = "How long (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--seconds",
+            defaultValue = "60",
+            paramLabel = "N",
+            description = "Seconds to play (${DEFAULT-VALUE}).")
     private double seconds;
 
     @Option(
@@ -49,7 +53,7 @@ public final class SoakCommand implements Callable<Integer> {
             names = "--warm-millis",
             defaultValue = "5000",
             paramLabel = "N",
-            description = "What the warm-up may take at most (${DEFAULT-VALUE}).")
+            description = "Milliseconds the warm-up may take at most (${DEFAULT-VALUE}).")
     private long warmMillis;
 
     /** For the option parser. */

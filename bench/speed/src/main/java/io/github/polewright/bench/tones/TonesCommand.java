@@ -55,14 +55,18 @@ public final class TonesCommand implements Callable<Integer> {
             description = "Share of a channel's time that each may take (${DEFAULT-VALUE}).")
     private double sharePercent;
 
-    @Option(names = "--forks", defaultValue = "1", paramLabel = "N", description = "JVMs (${DEFAULT-VALUE}).")
+    @Option(
+            names = "--forks",
+            defaultValue = "1",
+            paramLabel = "N",
+            description = "JVMs to measure in (${DEFAULT-VALUE}).")
     private int forks;
 
     @Option(
             names = "--seconds",
             defaultValue = "3",
             paramLabel = "N",
-            description = "Seconds measured a JVM, after two of warm-up (${DEFAULT-VALUE}).")
+            description = "Seconds measured in each JVM, after two of warm-up (${DEFAULT-VALUE}).")
     private int seconds;
 
     /** For the option parser. */

@@ -114,8 +114,8 @@ public final class HumRemover {
      * @throws IllegalArgumentException if {@code frames < 0} or the two ranges overlap without being the same
      */
     public void process(float[] source, int sourceOffset, float[] destination, int destinationOffset, int frames) {
-        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
-        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.interleaved("source", source, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination, destinationOffset, frames, channels);
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         for (int done = 0; done < frames; ) {
             int count = engine.room(frames - done);
@@ -139,8 +139,8 @@ public final class HumRemover {
      * @throws IllegalArgumentException if {@code frames < 0} or the two ranges overlap without being the same
      */
     public void process(double[] source, int sourceOffset, double[] destination, int destinationOffset, int frames) {
-        Ranges.interleaved("source", source.length, sourceOffset, frames, channels);
-        Ranges.interleaved("destination", destination.length, destinationOffset, frames, channels);
+        Ranges.interleaved("source", source, sourceOffset, frames, channels);
+        Ranges.interleaved("destination", destination, destinationOffset, frames, channels);
         Ranges.apart(source == destination, sourceOffset, destinationOffset, frames, channels);
         for (int done = 0; done < frames; ) {
             int count = engine.room(frames - done);

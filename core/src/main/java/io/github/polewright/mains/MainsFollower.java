@@ -70,7 +70,7 @@ public final class MainsFollower {
      * @throws IndexOutOfBoundsException if the frames do not lie in the array
      */
     public void follow(float[] source, int offset, int frames) {
-        Ranges.interleaved("source", source.length, offset, frames, channels);
+        Ranges.interleaved("source", source, offset, frames, channels);
         for (int done = 0; done < frames; ) {
             int count = input.room(frames - done);
             slab.load(source, offset + done * channels, count);
@@ -89,7 +89,7 @@ public final class MainsFollower {
      * @throws IndexOutOfBoundsException if the frames do not lie in the array
      */
     public void follow(double[] source, int offset, int frames) {
-        Ranges.interleaved("source", source.length, offset, frames, channels);
+        Ranges.interleaved("source", source, offset, frames, channels);
         for (int done = 0; done < frames; ) {
             int count = input.room(frames - done);
             slab.load(source, offset + done * channels, count);

@@ -29,7 +29,9 @@ class HumRemoverOverflowTest {
             input[n] = n % 2 == 0 ? Double.MAX_VALUE : -Double.MAX_VALUE;
         }
         remover.process(input, AT, output, AT, input.length - AT);
-        assertTrue(remover.restartedChannels() >= 1, "restarted " + remover.restartedChannels());
+        assertEquals(1, remover.restartedChannels());
+        // The burst lies in one slab of 20 frames, at whose end the states are cleared.
+        assertTrue(remover.replacedSamples() <= 20, "replaced " + remover.replacedSamples());
         int from = 25 * 16000;
         double left = Measure.db(
                 Measure.power(output, from, output.length) / Measure.power(hum.samples, from, output.length));

@@ -60,7 +60,8 @@ class FirstSecondTest {
     @ParameterizedTest
     @CsvSource({
         "1, 0, 2, true", // there from the first sample, as now
-        "1, 0.22, 2, false", // not yet in the first fifth of a second
+        "1, 0.15, 2, false", // missing in most of the first fifth of a second alone
+        "1, 0.25, 2, false", // begins after it
         "1, 0, 0.6, false", // gone after it
         "0.5, 0, 2, false", // 6 dB weaker than now
         "2, 0, 2, false", // 6 dB stronger

@@ -234,6 +234,40 @@ class ProofTest {
         assertEquals(10, run(20, HUM_HZ), 1.5 * TICK, "what plays notes has no quick proof, remembered or matched");
     }
 
+    /** Nor has the next trial, after this one has failed: what was taken for mains played notes. */
+    @Test
+    void twoJumpsAlsoEndTheMemoryOfTheProof() {
+        prove();
+        run(0.4, HUM_HZ);
+        proof.tick(TICK, HUM_HZ, true);
+        run(1, HUM_HZ);
+        proof.tick(TICK, HUM_HZ, true);
+        loseAll();
+        run(5, HUM_HZ);
+        assertEquals(MainsState.SEARCHING, proof.state());
+        lines(3, 1);
+        proof.begin(HUM_HZ);
+        assertEquals(9, run(9, HUM_HZ), 1e-9);
+    }
+
+    /** In the first 0.3 s of following a jump is not counted yet: after a reset as with a new object. */
+    @ParameterizedTest
+    @ValueSource(booleans = {false, true})
+    void aResetForgetsTheJumps(boolean used) {
+        if (used) {
+            prove();
+            run(5, HUM_HZ);
+            proof.reset();
+            assertEquals(MainsState.SEARCHING, proof.state());
+        }
+        prove();
+        run(0.1, HUM_HZ);
+        proof.tick(TICK, HUM_HZ, true);
+        run(1, HUM_HZ);
+        proof.tick(TICK, HUM_HZ, true);
+        assertTrue(proof.holds());
+    }
+
     @Test
     void jumpsFarApartAreForgiven() {
         prove();

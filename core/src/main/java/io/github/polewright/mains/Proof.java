@@ -52,6 +52,8 @@ final class Proof {
     void reset() {
         state = MainsState.SEARCHING;
         sinceProof = MEMORY_SECONDS;
+        sinceJump = 0;
+        jumping = false;
     }
 
     MainsState state() {

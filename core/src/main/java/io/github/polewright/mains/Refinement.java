@@ -33,6 +33,8 @@ final class Refinement {
     void begin(double fromHz, Recent recent) {
         frequencyHz = fromHz;
         slice = 0;
+        numerator = 0;
+        denominator = 0;
         for (int c = 0; c < copy.length; c++) {
             recent.copyLast(c, copy[c]);
         }

@@ -14,7 +14,7 @@ final class FrequencyLoop {
     private static final double MOST_LEARNT = 3.3;
     private static final double LEARN_PER_SECOND = 1;
     /** The mean of the normalised squares that is left as it is; 1 if the model were exact, 0.3 on a quiet grid. */
-    private static final double EXPECTED_SQUARE = 0.7;
+    private static final double EXPECTED_SQUARE = 0.8;
 
     private static final double MOST_SQUARE = 4;
     private static final double MOST_DRIFT = 1;

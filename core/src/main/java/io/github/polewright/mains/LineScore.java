@@ -32,6 +32,9 @@ final class LineScore {
     private final double[] score = new double[GRID];
     private final SlidingMedian median = new SlidingMedian(40);
     private int reach;
+    /** Beyond the main lobe of the window. */
+    private int lobe;
+
     private int peak;
     private double peakHz;
     private double peakHeight;
@@ -47,7 +50,9 @@ final class LineScore {
     /** Starts a spectrum that comes from {@code length} samples. */
     void begin(int length) {
         Arrays.fill(ratio, 0);
-        reach = length >= Transform.POINTS * 3 / 4 ? 8 : 16;
+        boolean isLong = length >= Transform.POINTS * 3 / 4;
+        reach = isLong ? 8 : 16;
+        lobe = isLong ? 3 : 6;
     }
 
     /** Takes one channel's spectrum out of a transform of two real channels packed as real and imaginary part. */
@@ -70,7 +75,9 @@ final class LineScore {
         int width = (BINS - FIRST_BIN) / FLOOR_SLICES;
         for (int b = FIRST_BIN + slice * width; b < FIRST_BIN + (slice + 1) * width; b++) {
             median.add(power[b + reach]);
-            double floor = median.median() * MEAN_OF_MEDIAN;
+            // In near silence a line's skirt stands high above the floor for many bins; only its top is a line.
+            double skirt = Math.max(power[b - lobe], power[b + lobe]);
+            double floor = Math.max(median.median() * MEAN_OF_MEDIAN, skirt);
             median.remove(power[b - reach]);
             if (power[b] > 0) {
                 ratio[b] += floor > 0 ? Math.min(Math.log1p(power[b] / floor), MOST_RATIO) : MOST_RATIO;

@@ -9,7 +9,10 @@ final class FrequencyLoop {
 
     private static final double FIRST_VARIANCE = 0.09;
     /** Of a quiet grid, in hertz squared a second; a generator of 250 mHz spread that forgets in 60 s has 2e-3. */
-    private static final double DRIFT = 1e-4;
+    private static final double DRIFT = 2e-4;
+
+    /** What agreeing innovations add, in drifts times their square. */
+    private static final double RUNNING = 0.5;
 
     private static final double MOST_LEARNT = 3.3;
     private static final double LEARN_PER_SECOND = 1;
@@ -48,7 +51,7 @@ final class FrequencyLoop {
     void predict(double seconds) {
         double turn = 2 * Math.PI * seconds;
         double strength = Math.max(1, excess);
-        double drift = Math.min(DRIFT * (Math.exp(learnt) + strength * strength - 1), MOST_DRIFT);
+        double drift = Math.min(DRIFT * (Math.exp(learnt) + RUNNING * (strength * strength - 1)), MOST_DRIFT);
         phaseVariance += 2 * turn * cross + turn * turn * frequencyVariance;
         cross += turn * frequencyVariance;
         frequencyVariance = Math.min(frequencyVariance + drift * seconds, FIRST_VARIANCE);

@@ -23,6 +23,9 @@ final class LineScore {
     /** Median of the exponential law: the floor is a median, the mean is 1.44 times as much. */
     private static final double MEAN_OF_MEDIAN = 1.44;
 
+    /** A top stands at least so many times above what is a lobe away. */
+    private static final double SKIRT = 2;
+
     private static final double AWAY_HZ = 0.8;
 
     private final double binHz;
@@ -77,7 +80,7 @@ final class LineScore {
             median.add(power[b + reach]);
             // In near silence a line's skirt stands high above the floor for many bins; only its top is a line.
             double skirt = Math.max(power[b - lobe], power[b + lobe]);
-            double floor = Math.max(median.median() * MEAN_OF_MEDIAN, skirt);
+            double floor = Math.max(median.median() * MEAN_OF_MEDIAN, SKIRT * skirt);
             median.remove(power[b - reach]);
             if (power[b] > 0) {
                 ratio[b] += floor > 0 ? Math.min(Math.log1p(power[b] / floor), MOST_RATIO) : MOST_RATIO;

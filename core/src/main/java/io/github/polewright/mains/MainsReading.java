@@ -90,6 +90,8 @@ public final class MainsReading {
     /** State, frequency and uncertainty in one line. */
     @Override
     public String toString() {
-        return state + " " + frequencyHz + " Hz +- " + uncertaintyHz + " Hz";
+        return Double.isNaN(frequencyHz)
+                ? state.toString()
+                : state + " " + frequencyHz + " Hz +- " + uncertaintyHz + " Hz";
     }
 }

@@ -45,9 +45,9 @@ class KnobTest {
         return worst;
     }
 
-    /** The table's figures for a stream of 50 ms glides that take over from each other, and 3 dB. */
+    /** What was measured for a stream of 50 ms glides that take over from each other when that length was chosen, and 3 dB. */
     @Test
-    void turnedKnobIsAsQuietAsTheTable() {
+    void turnedKnobIsAsQuietAsItsLengthWasChosenToBe() {
         double gentle = turnDb(hz -> Cookbook.lowPass(RATE_HZ, hz, 0.7));
         double resonant = turnDb(hz -> Cookbook.lowPass(RATE_HZ, hz, 4));
         double peak = turnDb(hz -> Cookbook.peaking(RATE_HZ, hz, 1, 12));

@@ -77,9 +77,8 @@ class InnovationTest {
             see(1, 0, 0.01, false);
             mean += 1 / innovation.phaseInformation() / 4000;
         }
-        // 1 + 4 + ... + 144 = 650. The common phase, taken out, lowers what is left; the larger of the mean noise and
-        // the
-        // last raises it: by e^-1 on average, if the mean were exact.
+        // 1 + 4 + ... + 144 = 650. The common phase, taken out, lowers what is left; the larger of
+        // the mean noise and the last raises it: by e^-1 on average, if the mean were exact.
         double bound = 650 / (2 * 0.01 * 0.01);
         assertTrue(mean * bound > 0.7 && mean * bound < 1.7, "times the bound: " + mean * bound);
     }

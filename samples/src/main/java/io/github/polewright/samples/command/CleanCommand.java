@@ -15,6 +15,7 @@ import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
@@ -52,7 +53,8 @@ final class CleanCommand implements Runnable {
 
     @Option(
             names = "--fixed",
-            description = "Keep notches where the survey finds the lines, instead of following the mains.")
+            description =
+                    "Keep notches where the survey finds the lines, instead of following the mains; --mains implies it.")
     private boolean fixed;
 
     @Option(names = "--no-dc", description = "Leave the DC offset in.")
@@ -69,6 +71,10 @@ final class CleanCommand implements Runnable {
         hum.check(spec);
         // Notches half as wide as their distance are no longer notches.
         Checks.range(spec, "--width", widthHz, 0.05, hum.mainsHz() > 0 ? Math.min(10, hum.mainsHz() / 2) : 10);
+        boolean stands = fixed || hum.mainsHz() > 0;
+        if (!stands && spec.commandLine().getParseResult().hasMatchedOption("--width")) {
+            throw new ParameterException(spec.commandLine(), "--width is of use with --fixed or --mains only");
+        }
         Checks.differs(spec, "OUT.wav", out, in);
         CleanWish wish = new CleanWish(hum.mainsHz(), hum.harmonics(), widthHz, !noDc, fixed);
         Recording recording = Recording.open(in);

@@ -1,6 +1,8 @@
 package io.github.polewright.samples.command;
 
+import io.github.polewright.samples.survey.MainsMoment;
 import io.github.polewright.samples.survey.Surveyor;
+import java.util.List;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 
@@ -10,8 +12,7 @@ final class HumOptions {
     @Option(
             names = "--mains",
             paramLabel = "HZ",
-            description =
-                    "Look for hum within 0.95 Hz of this frequency only, which implies --fixed; otherwise around 50 and 60 Hz.")
+            description = "Look for hum within 0.95 Hz of this frequency only; otherwise around 50 and 60 Hz.")
     private double mainsHz;
 
     @Option(
@@ -25,6 +26,12 @@ final class HumOptions {
             Checks.range(spec, "--mains", mainsHz, 10, 1000);
         }
         Checks.range(spec, "--harmonics", harmonics, 1, 200);
+    }
+
+    /** Whether a followed track lies where hum is looked for. */
+    boolean covers(List<MainsMoment> track) {
+        return mainsHz == 0
+                || track.stream().allMatch(moment -> Math.abs(moment.frequencyHz() - mainsHz) <= Surveyor.REACH_HZ);
     }
 
     double mainsHz() {

@@ -4,11 +4,13 @@ import io.github.polewright.samples.files.Recording;
 import io.github.polewright.samples.files.WholeFile;
 import io.github.polewright.samples.report.SurveyJson;
 import io.github.polewright.samples.report.SurveyText;
+import io.github.polewright.samples.survey.MainsMoment;
 import io.github.polewright.samples.survey.MainsTrack;
 import io.github.polewright.samples.survey.Survey;
 import io.github.polewright.samples.survey.Surveyor;
 import java.io.PrintWriter;
 import java.nio.file.Path;
+import java.util.List;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -50,7 +52,10 @@ final class SurveyCommand implements Runnable {
         }
         PrintWriter out = spec.commandLine().getOut();
         SurveyText.head(recording, survey).forEach(out::println);
-        SurveyText.track(MainsTrack.of(recording)).forEach(out::println);
+        List<MainsMoment> track = MainsTrack.of(recording);
+        if (hum.covers(track)) {
+            SurveyText.track(track).forEach(out::println);
+        }
         SurveyText.table(survey).forEach(out::println);
     }
 }

@@ -12,7 +12,9 @@ public final class Surveyor {
 
     // Mains of 50 and 60 Hz keep within 1 % but for rare disturbances; a little less than that on each side leaves out
     // the low notes of an instrument tuned to 440 Hz, the nearest of which are G at 49.00 and B at 61.74 Hz.
-    private static final double REACH_HZ = 0.95;
+    /** How far from the frequency named hum is looked for, in hertz. */
+    public static final double REACH_HZ = 0.95;
+
     private static final double[] NOMINAL_HZ = {50, 60};
     private static final double SHORTEST_SECONDS = 1;
     private static final double SEARCH_HZ = 0.12;

@@ -310,6 +310,8 @@ final class CommandLineTest extends CommandRun {
         assertTrue(gainDb > 6, "only " + gainDb + " dB better");
         assertEquals(0, run("survey", in), complained);
         assertTrue(printed.contains("drift of 0.1") || printed.contains("drift of 0.09"), printed);
+        assertEquals(0, run("survey", in, "--mains", "60"), complained);
+        assertFalse(printed.contains("drift of"), printed);
     }
 
     @Test

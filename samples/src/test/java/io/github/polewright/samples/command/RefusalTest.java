@@ -75,6 +75,7 @@ final class RefusalTest extends CommandRun {
                 "10",
                 "--width",
                 "6");
+        refused(Main.USAGE, "--width is of use with --fixed or --mains only", "clean", in, out, "--width", "2");
         refused(Main.USAGE, "--harmonics is 0; it must be 1 to 200 ", "survey", in, "--harmonics", "0");
         refused(Main.USAGE, "--harmonics is 201; it must be 1 to 200 ", "clean", in, out, "--harmonics", "201");
     }

@@ -46,6 +46,9 @@ public final class HumCommand implements Callable<Integer> {
     private static final int MOST_RATE_HZ = 192_000;
     private static final int MOST_FRAMES = 8192;
     private static final int MOST_CHANNELS = 64;
+    private static final int MOST_REPEATS = 10_000;
+    private static final double LEAST_SHARE = 0.001;
+    private static final double MOST_RATIO = 1000;
 
     @Spec
     private @Nullable CommandSpec spec;
@@ -104,9 +107,9 @@ public final class HumCommand implements Callable<Integer> {
         require(command, "--rate-hz", sampleRateHz, LEAST_RATE_HZ, MOST_RATE_HZ);
         require(command, "--channels", channels, 1, MOST_CHANNELS);
         require(command, "--frames", frames, 1, MOST_FRAMES);
-        require(command, "--repeats", repeats, 1, Integer.MAX_VALUE);
-        require(command, "--share", sharePercent, Double.MIN_VALUE, 100);
-        require(command, "--ratio", mostRatio, 1, Double.MAX_VALUE);
+        require(command, "--repeats", repeats, 1, MOST_REPEATS);
+        require(command, "--share", sharePercent, LEAST_SHARE, 100);
+        require(command, "--ratio", mostRatio, 1, MOST_RATIO);
         output.begin(
                 command,
                 text(
@@ -136,7 +139,7 @@ public final class HumCommand implements Callable<Integer> {
                 complaints.add(name + text(" takes %.2f %% of a core", share));
             }
             if (ratio > mostRatio) {
-                complaints.add(name + text("'s dearest block takes %.2f means", ratio));
+                complaints.add("the dearest block by " + name + text(" takes %.2f means", ratio));
             }
         }
         Map<String, String> setup = Map.of(

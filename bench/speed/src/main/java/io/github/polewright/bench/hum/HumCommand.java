@@ -2,6 +2,7 @@ package io.github.polewright.bench.hum;
 
 import io.github.polewright.bench.command.Output;
 import io.github.polewright.bench.jmh.HumRemoverBlocks;
+import io.github.polewright.bench.measure.BlockMean;
 import io.github.polewright.bench.measure.LeastTimes;
 import io.github.polewright.bench.report.Report;
 import io.github.polewright.bench.report.Row;
@@ -14,17 +15,8 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Objects;
 import java.util.concurrent.Callable;
-import java.util.concurrent.TimeUnit;
-import java.util.regex.Pattern;
 import org.jspecify.annotations.Nullable;
-import org.openjdk.jmh.annotations.Mode;
-import org.openjdk.jmh.runner.Runner;
 import org.openjdk.jmh.runner.RunnerException;
-import org.openjdk.jmh.runner.options.Options;
-import org.openjdk.jmh.runner.options.OptionsBuilder;
-import org.openjdk.jmh.runner.options.TimeValue;
-import org.openjdk.jmh.runner.options.VerboseMode;
-import org.openjdk.jmh.util.Statistics;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -41,7 +33,7 @@ import picocli.CommandLine.Spec;
                 + " and the ratio, 3 if not.")
 public final class HumCommand implements Callable<Integer> {
 
-    private static final double NANOS_PER_MICRO = 1000;
+    private static final int MEASURED_SECONDS = 4;
     private static final int LEAST_RATE_HZ = 8000;
     private static final int MOST_RATE_HZ = 192_000;
     private static final int MOST_FRAMES = 8192;
@@ -170,30 +162,12 @@ public final class HumCommand implements Callable<Integer> {
     }
 
     private Row mean(Removal removal, String name) throws RunnerException {
-        Options options = new OptionsBuilder()
-                .include("^" + Pattern.quote(HumRemoverBlocks.class.getName() + ".block") + "$")
-                .mode(Mode.AverageTime)
-                .timeUnit(TimeUnit.NANOSECONDS)
-                .forks(1)
-                .warmupIterations(2)
-                .warmupTime(TimeValue.seconds(1))
-                .measurementIterations(4)
-                .measurementTime(TimeValue.seconds(1))
-                .param("sampleRateHz", String.valueOf(sampleRateHz))
-                .param("channels", String.valueOf(channels))
-                .param("frames", String.valueOf(frames))
-                .param("removal", removal.name())
-                .verbosity(VerboseMode.SILENT)
-                .shouldFailOnError(true)
-                .build();
-        Statistics statistics =
-                new Runner(options).run().iterator().next().getPrimaryResult().getStatistics();
-        return new Row(
-                name,
-                "us",
-                statistics.getMean() / NANOS_PER_MICRO,
-                statistics.getMin() / NANOS_PER_MICRO,
-                statistics.getMax() / NANOS_PER_MICRO);
+        Map<String, String> parameters = Map.of(
+                "sampleRateHz", String.valueOf(sampleRateHz),
+                "channels", String.valueOf(channels),
+                "frames", String.valueOf(frames),
+                "removal", removal.name());
+        return BlockMean.micros(name, HumRemoverBlocks.class, parameters, 1, MEASURED_SECONDS);
     }
 
     private static String text(String pattern, Object... values) {

@@ -2,6 +2,7 @@ package io.github.polewright.bench.tones;
 
 import io.github.polewright.bench.command.Output;
 import io.github.polewright.bench.jmh.ToneBlocks;
+import io.github.polewright.bench.measure.BlockMean;
 import io.github.polewright.bench.report.Report;
 import io.github.polewright.bench.report.Row;
 import io.github.polewright.bench.report.Table;
@@ -13,16 +14,8 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Objects;
 import java.util.concurrent.Callable;
-import java.util.concurrent.TimeUnit;
-import java.util.regex.Pattern;
 import org.jspecify.annotations.Nullable;
-import org.openjdk.jmh.runner.Runner;
 import org.openjdk.jmh.runner.RunnerException;
-import org.openjdk.jmh.runner.options.Options;
-import org.openjdk.jmh.runner.options.OptionsBuilder;
-import org.openjdk.jmh.runner.options.TimeValue;
-import org.openjdk.jmh.runner.options.VerboseMode;
-import org.openjdk.jmh.util.Statistics;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -39,7 +32,6 @@ import picocli.CommandLine.Spec;
 public final class TonesCommand implements Callable<Integer> {
 
     private static final double[] RATES_HZ = {8000, 48_000};
-    private static final double NANOS_PER_MICRO = 1000;
     private static final double BLOCK_MICROS = 1e6 / ToneBlocks.BLOCKS;
 
     @Spec
@@ -110,27 +102,9 @@ public final class TonesCommand implements Callable<Integer> {
     }
 
     private Row row(Listener listener, double rateHz) throws RunnerException {
-        Options options = new OptionsBuilder()
-                .include("^" + Pattern.quote(ToneBlocks.class.getName() + ".block") + "$")
-                .timeUnit(TimeUnit.NANOSECONDS)
-                .forks(forks)
-                .warmupIterations(2)
-                .warmupTime(TimeValue.seconds(1))
-                .measurementIterations(seconds)
-                .measurementTime(TimeValue.seconds(1))
-                .param("sampleRateHz", String.valueOf(rateHz))
-                .param("listener", listener.name())
-                .verbosity(VerboseMode.SILENT)
-                .shouldFailOnError(true)
-                .build();
-        Statistics statistics =
-                new Runner(options).run().iterator().next().getPrimaryResult().getStatistics();
-        return new Row(
-                listener.title() + text(" at %.0f Hz", rateHz),
-                "us",
-                statistics.getMean() / NANOS_PER_MICRO,
-                statistics.getMin() / NANOS_PER_MICRO,
-                statistics.getMax() / NANOS_PER_MICRO);
+        Map<String, String> parameters = Map.of("sampleRateHz", String.valueOf(rateHz), "listener", listener.name());
+        return BlockMean.micros(
+                listener.title() + text(" at %.0f Hz", rateHz), ToneBlocks.class, parameters, forks, seconds);
     }
 
     private static String text(String pattern, Object... values) {

@@ -105,7 +105,7 @@ final class SlotAims {
 
     /** The frames of one segment, for slots that have farther to go than the glide knew. */
     int frames(Glide glide, int segment) {
-        return atMost(Math.ceil(glide.frames(segment) * slowdown));
+        return atMost(Math.ceil(glide.knots().frames(segment) * slowdown));
     }
 
     int risingFrames(Glide glide) {
@@ -129,12 +129,12 @@ final class SlotAims {
     /** Aims at the end of a segment; false if a bucket does not admit that yet. */
     boolean aim(Glide glide, int segment, Bucket bucket) {
         boolean admitted = true;
-        double share = (double) (behind + glide.frames(segment)) / glide.movingFrames();
+        double share = (double) (behind + glide.knots().frames(segment)) / glide.movingFrames();
         for (int slot = 0; slot < ways.length; slot++) {
             if (ways[slot] == JOINED) {
                 System.arraycopy(glide.knot(segment + 1), slot * WIDTH, goals, slot * WIDTH, WIDTH);
-                distances[slot] = glide.distance(segment, slot);
-                leaks[slot] = glide.leak(segment, slot);
+                distances[slot] = glide.distances()[segment][slot];
+                leaks[slot] = glide.leaks()[segment][slot];
             } else {
                 aimAlone(glide, segment, slot, share);
             }
@@ -197,7 +197,7 @@ final class SlotAims {
 
     /** A segment is behind; slots that came from elsewhere have joined when the last coefficient has stopped. */
     void pass(Glide glide, int segment) {
-        behind += glide.frames(segment);
+        behind += glide.knots().frames(segment);
         for (int slot = 0; slot < ways.length; slot++) {
             if (behind >= glide.movingFrames() && (ways[slot] == MIXING || ways[slot] == STRAIGHT)) {
                 ways[slot] = JOINED;

@@ -281,7 +281,7 @@ public final class Walk {
     }
 
     private boolean isOver() {
-        while (segment < glide.segmentCount() && glide.frames(segment) == 0) {
+        while (segment < glide.segmentCount() && glide.knots().frames(segment) == 0) {
             segment++;
             aims.swap(glide, segment);
         }
